@@ -1,0 +1,96 @@
+import { z } from 'zod'
+import { id, instant, named } from './common'
+import { fitResultContract, fittedParameterContract, derivedContract, noteContract } from './fit'
+
+export const seriesParams = z.object({ series: id })
+export const readingLimits = ['exact', 'below', 'above', 'salt-precipitated'] as const
+
+export const saltContract = z.object({
+  formula: z.string().describe('plain text, such as Na2SO4'),
+  name: z.string(),
+  anion: z.string().describe('such as SO4^2-'),
+  cation: z.string().describe('such as Na^+'),
+})
+
+export const campaignSummaryContract = z.object({
+  id,
+  name: z.string(),
+  lab: named,
+  clouds: z.enum(['on-heating', 'on-cooling']),
+})
+
+/** A reading as small multiples need it. */
+export const readingPointContract = z.object({
+  x: z.number().describe('concentration, mol/L'),
+  y: z.number().describe('cloud point, °C'),
+  limit: z.enum(readingLimits),
+  setAside: z.boolean(),
+  blank: z.boolean().describe('belongs to the batch and is shared by its series'),
+})
+
+/** One series of a project with its current fit, without residuals and covariance. */
+export const seriesSummaryContract = z.object({
+  id,
+  salt: saltContract,
+  campaign: campaignSummaryContract,
+  revision: z.number().int().nullable().describe('null: nothing measured yet'),
+  readings: z.array(readingPointContract),
+  fit: z.object({
+    id,
+    model: fitResultContract.shape.model,
+    residualStandardDeviation: z.number().nullable(),
+    parameters: z.array(fittedParameterContract),
+    covariance: z.array(z.array(z.number())).nullable(),
+    derived: z.array(derivedContract),
+    notes: z.array(noteContract),
+  }).nullable(),
+})
+export type SeriesSummary = z.infer<typeof seriesSummaryContract>
+
+export const readingContract = z.object({
+  id,
+  number: z.number().int().describe('place in the table, from 1'),
+  x: z.number().describe('concentration, mol/L'),
+  y: z.number().describe('cloud point, °C'),
+  sd: z.number().nullable().describe('standard uncertainty of y, K'),
+  n: z.number().int().nullable().describe('independent samples'),
+  batch: z.object({ id, label: z.string() }).nullable(),
+  direction: z.enum(['heating', 'cooling']),
+  limit: z.enum(readingLimits),
+  blank: z.boolean(),
+  note: z.string().nullable(),
+  setAside: z.object({ reason: z.string(), by: z.string(), at: instant }).nullable(),
+})
+
+export const revisionContract = z.object({
+  number: z.number().int(),
+  summary: z.string(),
+  by: z.string(),
+  at: instant,
+})
+
+/** How well one model stands beside the others on the same readings. */
+export const supportContract = z.object({
+  model: fitResultContract.shape.model,
+  residualStandardDeviation: z.number().nullable(),
+  aicc: z.number().nullable(),
+  deltaAicc: z.number().nullable().describe('AICc above the best model'),
+})
+
+export const seriesContract = z.object({
+  id,
+  project: named,
+  salt: saltContract,
+  campaign: campaignSummaryContract.extend({
+    conditions: z.string().describe('sample, concentration, direction and rate in a sentence'),
+  }),
+  revision: z.number().int().nullable(),
+  readings: z.array(readingContract),
+  fit: fitResultContract.extend({ id }).nullable(),
+  support: z.object({
+    verdict: z.enum(['supported', 'undecided', 'no-evidence']).nullable(),
+    models: z.array(supportContract),
+  }),
+  revisions: z.array(revisionContract),
+})
+export type Series = z.infer<typeof seriesContract>
