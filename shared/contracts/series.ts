@@ -21,6 +21,7 @@ export const campaignSummaryContract = z.object({
 
 /** A reading as small multiples need it. */
 export const readingPointContract = z.object({
+  id: id.describe('the same blank carries the same id in every series of its batch'),
   x: z.number().describe('concentration, mol/L'),
   y: z.number().describe('cloud point, °C'),
   limit: z.enum(readingLimits),
@@ -28,11 +29,19 @@ export const readingPointContract = z.object({
   blank: z.boolean().describe('belongs to the batch and is shared by its series'),
 })
 
+/** What the salt was weighed into, when it is on record. */
+export const stockSummaryContract = z.object({
+  lot: z.string(),
+  madeOn: z.iso.date().nullable(),
+  ageAtUse: z.number().nullable().describe('months from making the stock to the first reading of the series'),
+})
+
 /** One series of a project with its current fit, without residuals and covariance. */
 export const seriesSummaryContract = z.object({
   id,
   salt: saltContract,
   campaign: campaignSummaryContract,
+  stock: stockSummaryContract.nullable(),
   revision: z.number().int().nullable().describe('null: nothing measured yet'),
   readings: z.array(readingPointContract),
   fit: z.object({
