@@ -2,7 +2,7 @@ import { aliases } from './aliases'
 
 export default defineNuxtConfig({
   modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxt/icon', '@nuxt/eslint', 'nuxt-auth-utils', 'nuxt-security'],
-  components: [{ path: '~~/components', pathPrefix: false }],
+  components: [{ path: '~~/components', pathPrefix: false, extensions: ['vue'] }],
   // Nuxt's own helpers stay automatic; ours are imported by path so that the lint rule on arrows can see them.
   imports: { scan: false },
   devtools: { enabled: false },

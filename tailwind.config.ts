@@ -5,7 +5,7 @@ const tokens = ['paper', 'raise', 'wash', 'cloud', 'hair', 'rule', 'ink', 'ink-2
 const ions = ['co3', 'so4', 'f', 'h2po4', 'cl', 'br', 'no3', 'i', 'clo4', 'scn']
 
 export default {
-  content: ['./components/**/*.vue', './layouts/**/*.vue', './pages/**/*.vue', './app.vue', './error.vue'],
+  content: ['./components/**/*.{vue,ts}', './layouts/**/*.vue', './pages/**/*.vue', './app.vue', './error.vue'],
   darkMode: ['selector', '[data-theme="dark"]'],
   theme: {
     screens: { m: '701px', l: '1201px' },
