@@ -2,6 +2,7 @@ import { defineConfig } from 'drizzle-kit'
 
 export default defineConfig({
   dialect: 'postgresql',
-  schema: './server/database/schema/index.ts',
+  // the bundle that scripts/build/generate-migration.mjs makes
+  schema: './node_modules/.cache/anionary/schema.mjs',
   out: './server/database/migrations',
 })

@@ -1,4 +1,5 @@
 import { aliases } from './aliases'
+import { buildTools } from './scripts/build/tools.mjs'
 
 export default defineNuxtConfig({
   modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxt/icon', '@nuxt/eslint', 'nuxt-auth-utils', 'nuxt-security'],
@@ -26,6 +27,11 @@ export default defineNuxtConfig({
   nitro: { imports: { dirs: [], dirsScanOptions: { fileFilter: () => false } } },
   typescript: { strict: true },
   telemetry: false,
+  hooks: {
+    'nitro:init'(nitro) {
+      nitro.hooks.hook('compiled', () => buildTools(nitro.options.output.serverDir))
+    },
+  },
   eslint: { config: { stylistic: true } },
   icon: { provider: 'none', clientBundle: { scan: true }, serverBundle: { collections: ['lucide'] } },
   tailwindcss: { cssPath: false, viewer: false },

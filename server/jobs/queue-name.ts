@@ -1,0 +1,2 @@
+/** The schema that pg-boss keeps its tables in. */
+export const queueSchema = 'queue'
