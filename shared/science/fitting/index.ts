@@ -1,0 +1,5 @@
+/** Fitting of the named models; runs in the browser and on the server. Expressions have their own entry, ./expression. */
+export { bandAt, curveAt, hasCovarianceRow, type Band, type DrawableFit } from './curve'
+export { compareModels, supportOf, type ModelComparison, type ModelSupport, type Support, type Verdict } from './compare'
+export { fit } from './fit'
+export type * from './types'

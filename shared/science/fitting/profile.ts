@@ -1,0 +1,192 @@
+/**
+ * The sum of squares of a binding model as a function of K alone (variable projection). For given K the model is linear
+ * in T0, c and Bmax; [1, x] is orthonormalized once, the binding column is projected off it for each K. Two bases span
+ * the same space as the binding term without cancellation: x²/(1+Kx) where K·x ≤ 1 for all x, 1/(1+Kx) above.
+ *
+ * @source Golub & Pereyra, SIAM Journal on Numerical Analysis 10 (1973) 413
+ */
+import { findRoot } from '../numeric/roots'
+import type { ScaledData } from './scale'
+
+/** Which of the linear parameters are free, and what the others are held at (scaled). */
+export interface LinearPart {
+  level: number | null
+  slope: number | null
+}
+
+export interface ProfileRange {
+  low: number
+  high: number
+  /** True where the range ends at a bound that somebody set, false where it stands for a limit. */
+  isLowBound: boolean
+  isHighBound: boolean
+}
+
+export interface ProfileMinimum {
+  /** ln K, or the limit the sum of squares is lowest at. */
+  at: number | 'zero' | 'infinity'
+  isAtBound: boolean
+  sum: number
+}
+
+const gridStep = Math.LN10 / 8
+const reach = 3 * Math.LN10
+/** Largest x beside the smallest positive x that the grid follows. */
+const widestLadder = Math.log(1e6)
+
+export class BindingProfile {
+  /** Of the latest `at`: the sum of squares and its exact derivative by ln K. */
+  sum = 0
+  derivative = 0
+  /** Coefficient of the latest basis column, and which basis it belongs to. */
+  coefficient = 0
+  isLowBasis = false
+
+  private readonly n: number
+  private readonly constant: Float64Array[] = []
+  private readonly target: Float64Array
+  private readonly column: Float64Array
+  private readonly slopeOfColumn: Float64Array
+  private readonly hasLevel: boolean
+  private readonly hasSlope: boolean
+
+  constructor(private readonly data: ScaledData, linear: LinearPart) {
+    const { n, x, y, root } = data
+    this.n = n
+    this.hasLevel = linear.level === null
+    this.hasSlope = linear.slope === null
+    this.column = new Float64Array(n)
+    this.slopeOfColumn = new Float64Array(n)
+    this.target = new Float64Array(n)
+    for (let i = 0; i < n; i++) this.target[i] = (y[i]! - (linear.level ?? 0) - (linear.slope ?? 0) * x[i]!) * root[i]!
+    if (this.hasLevel) this.addConstant(root.slice())
+    if (this.hasSlope) this.addConstant(x.map((value, i) => value * root[i]!))
+    for (const column of this.constant) project(this.target, column)
+  }
+
+  private addConstant(column: Float64Array): void {
+    const before = norm(column)
+    // Twice is enough: the second pass removes what rounding left in the first.
+    for (let pass = 0; pass < 2; pass++) for (const known of this.constant) project(column, known)
+    const length = norm(column)
+    if (length <= 1e-13 * before) return
+    for (let i = 0; i < this.n; i++) column[i]! /= length
+    this.constant.push(column)
+  }
+
+  /** Sum of squares with no binding term at all. */
+  get sumWithout(): number {
+    return square(this.target)
+  }
+
+  at(logK: number): number {
+    const { n, column, slopeOfColumn, data: { x, root } } = this
+    const k = Math.exp(logK)
+    const isLow = this.isLowBasis = k < 1
+    const isFalling = isLow || this.hasLevel
+    for (let i = 0; i < n; i++) {
+      const xi = x[i]!
+      const t = 1 / (1 + k * xi)
+      const g = root[i]! * (isLow ? (this.hasSlope ? xi * xi * t : xi * t) : (this.hasLevel ? t : k * xi * t))
+      column[i] = g
+      slopeOfColumn[i] = isFalling ? -k * xi * t * g : t * g
+    }
+    this.solve()
+    return this.sum
+  }
+
+  private solve(): void {
+    const { n, column, slopeOfColumn, target } = this
+    const before = square(column)
+    for (const known of this.constant) project(column, known)
+    const gg = square(column)
+    let gy = 0
+    for (let i = 0; i < n; i++) gy += column[i]! * target[i]!
+    const a = this.coefficient = gg > 1e-26 * before ? gy / gg : 0
+    let sum = 0
+    let dot = 0
+    for (let i = 0; i < n; i++) {
+      const r = target[i]! - a * column[i]!
+      sum += r * r
+      dot += r * slopeOfColumn[i]!
+    }
+    this.sum = sum
+    this.derivative = -2 * a * dot
+  }
+
+  /** The sum of squares in a limit: a quadratic (or a line, without c) for K → 0, a step behind the blanks for K → ∞. */
+  limit(end: 'zero' | 'infinity'): number {
+    const { n, column, data: { x, root } } = this
+    for (let i = 0; i < n; i++) {
+      const value = end === 'infinity' ? Number(x[i]! > 0) : this.hasSlope ? x[i]! * x[i]! : x[i]!
+      column[i] = value * root[i]!
+    }
+    this.slopeOfColumn.fill(0)
+    this.solve()
+    return this.sum
+  }
+
+  /** Lowest point over the range, limits and bounds included. */
+  minimum(range: ProfileRange): ProfileMinimum {
+    let best = this.ends(range)
+    let previous = range.low
+    this.at(previous)
+    let previousDerivative = this.derivative
+    const steps = Math.max(1, Math.ceil((range.high - range.low) / gridStep))
+    const derivativeAt = (logK: number) => {
+      this.at(logK)
+      return this.derivative
+    }
+    for (let j = 1; j <= steps; j++) {
+      const logK = j === steps ? range.high : range.low + (range.high - range.low) * j / steps
+      const derivative = derivativeAt(logK)
+      if (previousDerivative < 0 && derivative >= 0) {
+        const at = findRoot(derivativeAt, previous, logK, previousDerivative, derivative, 1e-12)
+        const sum = this.at(at)
+        if (sum < best.sum) best = { at, isAtBound: false, sum }
+      }
+      previous = logK
+      previousDerivative = derivative
+    }
+    return best
+  }
+
+  private ends(range: ProfileRange): ProfileMinimum {
+    const low: ProfileMinimum = range.isLowBound
+      ? { at: range.low, isAtBound: true, sum: this.at(range.low) }
+      : { at: 'zero', isAtBound: false, sum: this.limit('zero') }
+    const high: ProfileMinimum = range.isHighBound
+      ? { at: range.high, isAtBound: true, sum: this.at(range.high) }
+      : { at: 'infinity', isAtBound: false, sum: this.limit('infinity') }
+    return low.sum <= high.sum ? low : high
+  }
+}
+
+/** The range of ln K (x scaled to at most 1) that readings can speak about, cut to the bounds on K. */
+export function profileRange(data: ScaledData, lowest: number, highest: number): ProfileRange {
+  let smallest = 1
+  for (let i = 0; i < data.n; i++) if (data.x[i]! > 0 && data.x[i]! < smallest) smallest = data.x[i]!
+  const low = -reach
+  const high = reach + Math.min(-Math.log(smallest), widestLadder)
+  const isLowBound = lowest > 0
+  const isHighBound = highest < Infinity
+  const from = isLowBound ? Math.log(lowest) : Math.min(low, Math.log(highest) - reach)
+  const to = isHighBound ? Math.log(highest) : Math.max(high, from + reach)
+  return { low: from, high: to, isLowBound, isHighBound }
+}
+
+function square(v: Float64Array): number {
+  let sum = 0
+  for (let i = 0; i < v.length; i++) sum += v[i]! * v[i]!
+  return sum
+}
+
+function norm(v: Float64Array): number {
+  return Math.sqrt(square(v))
+}
+
+function project(v: Float64Array, unit: Float64Array): void {
+  let dot = 0
+  for (let i = 0; i < v.length; i++) dot += v[i]! * unit[i]!
+  for (let i = 0; i < v.length; i++) v[i]! -= dot * unit[i]!
+}
