@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process'
-import { closeSync, openSync, readFileSync } from 'node:fs'
+import { closeSync, existsSync, openSync, readFileSync, renameSync } from 'node:fs'
 import { join } from 'node:path'
 import { pathToFileURL } from 'node:url'
 import { root } from './places.mjs'
@@ -24,6 +24,8 @@ const PATIENCE = 10_000
  */
 export function startChild(name, script, { env, logs }) {
   const log = join(logs, `${name.replaceAll(' ', '-')}.log`)
+  // The run before stays readable: it may be the one that crashed.
+  if (existsSync(log)) renameSync(log, `${log}.before`)
   const output = openSync(log, 'w', 0o600)
   // Only migrations and seeds work as the owner of the database.
   const inherited = { ...process.env }
