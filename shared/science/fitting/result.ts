@@ -1,4 +1,5 @@
 /** From a solution on scaled axes to the answer of the fit route. */
+import { units } from '../chemistry/units'
 import { normalQuantile, studentQuantile } from '../numeric/distributions'
 import { engine } from '../version'
 import { conditionalIntervals, type Ends } from './conditional-intervals'
@@ -197,7 +198,7 @@ function limitSlope(analysis: Analysis): DerivedQuantity[] {
   const j = indexOf(estimated, 'initialSlope')
   if (j < 0) return []
   return [{
-    name: 'initialSlope', unit: 'K M⁻¹',
+    name: 'initialSlope', unit: units.initialSlope,
     estimate: toOriginal(estimated, problem.data, j, values[j]!),
     standardError: standardErrors(analysis).get('initialSlope') ?? null,
   }]

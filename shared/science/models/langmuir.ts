@@ -1,3 +1,4 @@
+import { units } from '../chemistry/units'
 import { association, level, saturation, type Model } from './model'
 
 /**
@@ -22,8 +23,8 @@ export const langmuir: Model = {
     const bmax = p[1]!
     const k = p[2]!
     return [
-      { name: 'Kd', unit: 'M', value: 1 / k, gradient: [0, 0, -1 / (k * k)] },
-      { name: 'BmaxK', unit: 'K M⁻¹', value: bmax * k, gradient: [0, k, bmax] },
+      { name: 'Kd', unit: units.Kd, value: 1 / k, gradient: [0, 0, -1 / (k * k)] },
+      { name: 'BmaxK', unit: units.BmaxK, value: bmax * k, gradient: [0, k, bmax] },
     ]
   },
 }

@@ -2,13 +2,14 @@
  * What is left of a binding model when the best K runs to zero or to infinity: linear models whose coefficients are the
  * quantities that stay determined.
  */
+import { units } from '../chemistry/units'
 import { level, saturation, slope, type Model, type ParameterDefinition } from './model'
 import { linear } from './linear'
 import { linearQuadratic } from './linear-quadratic'
 
-const initialSlope: ParameterDefinition = { name: 'initialSlope', unit: 'K M⁻¹', yPower: 1, xPower: -1 }
-const curvature: ParameterDefinition = { name: 'curvature', unit: 'K M⁻²', yPower: 1, xPower: -2 }
-const plateau: ParameterDefinition = { name: 'plateau', unit: '°C', yPower: 1, xPower: 0, isLevel: true }
+const initialSlope: ParameterDefinition = { name: 'initialSlope', unit: units.initialSlope, yPower: 1, xPower: -1 }
+const curvature: ParameterDefinition = { name: 'curvature', unit: units.curvature, yPower: 1, xPower: -2 }
+const plateau: ParameterDefinition = { name: 'plateau', unit: units.plateau, yPower: 1, xPower: 0, isLevel: true }
 
 /** K → 0 with a free slope: T0, c + Bmax·K and −Bmax·K². */
 export const weakBinding: Model = { ...linearQuadratic, parameters: [level, initialSlope, curvature], derived: () => [] }

@@ -1,6 +1,7 @@
+import { units } from '../chemistry/units'
 import { association, level, saturation, slope, type Model, type ParameterDefinition } from './model'
 
-const cooperativity: ParameterDefinition = { name: 'h', unit: '1', yPower: 0, xPower: 0, isShape: true }
+const cooperativity: ParameterDefinition = { name: 'h', unit: units.h, yPower: 0, xPower: 0, isShape: true }
 
 /**
  * T0 + c·x + Bmax·(K·x)^h/(1 + (K·x)^h): binding with cooperativity h [1].
@@ -23,7 +24,7 @@ export const linearHill: Model = {
     out[at + 4 * stride] = spread === 0 ? 0 : p[2]! * spread * Math.log(p[3]! * x)
   },
   derived: p => [
-    { name: 'Kd', unit: 'M', value: 1 / p[3]!, gradient: [0, 0, 0, -1 / (p[3]! * p[3]!), 0] },
+    { name: 'Kd', unit: units.Kd, value: 1 / p[3]!, gradient: [0, 0, 0, -1 / (p[3]! * p[3]!), 0] },
   ],
 }
 

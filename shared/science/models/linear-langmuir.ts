@@ -1,3 +1,4 @@
+import { units } from '../chemistry/units'
 import { association, level, saturation, slope, type DerivedValue, type Model } from './model'
 
 /**
@@ -25,9 +26,9 @@ export const linearLangmuir: Model = {
     const bmax = p[2]!
     const k = p[3]!
     return [
-      { name: 'Kd', unit: 'M', value: 1 / k, gradient: [0, 0, 0, -1 / (k * k)] },
-      { name: 'initialSlope', unit: 'K M⁻¹', value: c + bmax * k, gradient: [0, 1, k, bmax] },
-      { name: 'BmaxK', unit: 'K M⁻¹', value: bmax * k, gradient: [0, 0, k, bmax] },
+      { name: 'Kd', unit: units.Kd, value: 1 / k, gradient: [0, 0, 0, -1 / (k * k)] },
+      { name: 'initialSlope', unit: units.initialSlope, value: c + bmax * k, gradient: [0, 1, k, bmax] },
+      { name: 'BmaxK', unit: units.BmaxK, value: bmax * k, gradient: [0, 0, k, bmax] },
       ...extremum(c, bmax, k),
     ]
   },
@@ -46,9 +47,9 @@ function extremum(c: number, bmax: number, k: number): DerivedValue[] {
   const share = (rho - 1) / rho
   const height = Math.sign(bmax) * (Math.sqrt(Math.abs(bmax)) - Math.sqrt(Math.abs(c) / k)) ** 2
   return [
-    { name: `${kind}Concentration`, unit: 'M', value: at, gradient: [0, -half / c, half / bmax, half / k - at / k] },
+    { name: `${kind}Concentration`, unit: units[`${kind}Concentration`], value: at, gradient: [0, -half / c, half / bmax, half / k - at / k] },
     // The gradient of the height is ∂f/∂p at x*, because ∂f/∂x is zero there.
-    { name: `${kind}Shift`, unit: 'K', value: height, gradient: [0, at, share, bmax * at / (rho * rho)] },
-    { name: 'crossoverConcentration', unit: 'M', value: -bmax / c - 1 / k, gradient: [0, bmax / (c * c), -1 / c, 1 / (k * k)] },
+    { name: `${kind}Shift`, unit: units[`${kind}Shift`], value: height, gradient: [0, at, share, bmax * at / (rho * rho)] },
+    { name: 'crossoverConcentration', unit: units.crossoverConcentration, value: -bmax / c - 1 / k, gradient: [0, bmax / (c * c), -1 / c, 1 / (k * k)] },
   ]
 }

@@ -1,3 +1,4 @@
+import { units } from '../chemistry/units'
 import type { ModelName } from '../fitting/types'
 
 /** One parameter of a model and how it follows a change of axes x → x/xScale, y → (y − yOffset)/yScale. */
@@ -32,7 +33,7 @@ export interface Model {
   derived(parameters: ArrayLike<number>): DerivedValue[]
 }
 
-export const level: ParameterDefinition = { name: 'T0', unit: '°C', yPower: 1, xPower: 0, isLevel: true }
-export const slope: ParameterDefinition = { name: 'c', unit: 'K M⁻¹', yPower: 1, xPower: -1 }
-export const saturation: ParameterDefinition = { name: 'Bmax', unit: 'K', yPower: 1, xPower: 0 }
-export const association: ParameterDefinition = { name: 'K', unit: 'M⁻¹', yPower: 0, xPower: -1, isShape: true }
+export const level: ParameterDefinition = { name: 'T0', unit: units.T0, yPower: 1, xPower: 0, isLevel: true }
+export const slope: ParameterDefinition = { name: 'c', unit: units.c, yPower: 1, xPower: -1 }
+export const saturation: ParameterDefinition = { name: 'Bmax', unit: units.Bmax, yPower: 1, xPower: 0 }
+export const association: ParameterDefinition = { name: 'K', unit: units.K, yPower: 0, xPower: -1, isShape: true }
