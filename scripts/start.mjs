@@ -8,6 +8,7 @@ import { webAddress } from './lib/settings.mjs'
 import { startStack } from './lib/stack.mjs'
 import { StopSentence, runMain } from './lib/stop-sentence.mjs'
 
+/** @type {[string, string][]} */
 const ACCOUNTS = [
   ['ines@norrvik.example', 'lead, Norrvik; owner of the project'],
   ['tomas@norrvik.example', 'chemist, Norrvik'],

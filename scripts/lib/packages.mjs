@@ -5,13 +5,13 @@ import { must, run } from './run.mjs'
 import { hashOfFiles, hashOfSources, isStamped } from './stamps.mjs'
 import { StopSentence } from './stop-sentence.mjs'
 
-const OLDEST_NODE = [20, 19]
+const OLDEST_NODE = { major: 20, minor: 19 }
 
 /** Stops on a Node.js that the packages do not run on. @param {string} [version] */
 export function checkNode(version = process.versions.node) {
-  const [major, minor] = version.split('.').map(Number)
-  if (major > OLDEST_NODE[0] || (major === OLDEST_NODE[0] && minor >= OLDEST_NODE[1])) return
-  throw new StopSentence(`Node.js ${version} is too old: install Node.js ${OLDEST_NODE.join('.')} or newer.`)
+  const [major = 0, minor = 0] = version.split('.').map(Number)
+  if (major > OLDEST_NODE.major || (major === OLDEST_NODE.major && minor >= OLDEST_NODE.minor)) return
+  throw new StopSentence(`Node.js ${version} is too old: install Node.js ${OLDEST_NODE.major}.${OLDEST_NODE.minor} or newer.`)
 }
 
 /** Installs the npm packages when the lock file changed since they were installed here. */

@@ -9,7 +9,7 @@ export function startedAt(pid) {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
     // The program's name may hold spaces and brackets: fields are counted after its closing one.
     const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ')
-    return fields[0] === 'Z' ? null : fields[19]
+    return fields[0] === 'Z' ? null : fields[19] ?? null
   }
   catch {
     return null

@@ -22,12 +22,13 @@ export function interruptShown() {
  * @param {{ env?: NodeJS.ProcessEnv, show?: boolean, cwd?: string, input?: string }} [options] show: straight to our own output
  * @returns {Promise<Finished>}
  */
-export function run([program, ...args], { env, show = false, cwd = root, input } = {}) {
+export function run([program = '', ...args], { env, show = false, cwd = root, input } = {}) {
   return new Promise((done) => {
     const output = show ? 'inherit' : 'pipe'
-    const child = spawn(program, args, {
-      cwd, env: { ...process.env, ...env }, stdio: [input === undefined ? 'ignore' : 'pipe', output, output],
-    })
+    /** @type {import('node:child_process').StdioOptions} */
+    const stdio = [input === undefined ? 'ignore' : 'pipe', output, output]
+    /** @type {import('node:child_process').ChildProcess} */
+    const child = spawn(program, args, { cwd, env: { ...process.env, ...env }, stdio })
     if (show) shown.add(child)
     let stdout = ''
     let stderr = ''

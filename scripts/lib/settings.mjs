@@ -27,7 +27,7 @@ export async function serviceSettings(data) {
     ? { S3_ENDPOINT: `http://127.0.0.1:${objectsPort}`, S3_BUCKET: BUCKET, S3_ACCESS_KEY_ID: secrets.objectStoreKeyId, S3_SECRET_ACCESS_KEY: secrets.objectStoreKey }
     : {}
   const mail = mailPort ? { SMTP_URL: `smtp://127.0.0.1:${mailPort}` } : {}
-  return { objectsPort, mailPort, env: { ...objects, ...mail } }
+  return { objectsPort, mailPort, env: /** @type {Record<string, string>} */ ({ ...objects, ...mail }) }
 }
 
 /**
