@@ -28,6 +28,7 @@ export async function bundle(entries, outdir) {
     format: 'esm',
     target: 'node20',
     alias: { '~~': root, '#shared': `${root}/shared` },
+    loader: { '.tsv': 'text' },
     external: ['pg-native'],
     banner: { js: banner },
     logLevel: 'warning',

@@ -4,9 +4,10 @@ import { drizzle } from 'drizzle-orm/node-postgres'
 import { Client } from 'pg'
 import * as schema from '../schema'
 import { accounts } from './accounts'
+import { demo } from './demo'
 import type { Seed } from './seeding'
 
-const seeds: Seed[] = [accounts]
+const seeds: Seed[] = [accounts, demo]
 const seedLock = 7_220_452
 
 const connectionString = process.env.DATABASE_OWNER_URL

@@ -1,0 +1,104 @@
+import { v7 } from 'uuid'
+import { fromTable } from '~~/data-seeds/demo/csv'
+import type { DemoReading } from '~~/data-seeds/demo/generate'
+import table from '~~/data-seeds/demo/readings.tsv'
+import setting from '~~/data-seeds/demo/setting.json'
+import truth from '~~/data-seeds/demo/truth.json'
+import type { Transaction } from '../client'
+import { reading, revisionReading, series, seriesRevision } from '../schema'
+import { historyOf, type KnownReading, type PlannedRevision } from './demo-history'
+import { batchKey, campaignKey, labNames, plantPlaces, stockKey, type LabName, type Places } from './demo-places'
+import { personByEmail, projectByName, type Seed } from './seeding'
+
+interface SeriesPlan {
+  id: string
+  row: typeof series.$inferInsert
+  revisions: PlannedRevision[]
+}
+
+const campaignNames = ['spring', 'autumn']
+
+/** Every salt in every campaign has a series, also where nobody has measured yet. */
+function planSeries(project: string, places: Places, readings: readonly DemoReading[]): SeriesPlan[] {
+  return labNames.flatMap(labName => campaignNames.flatMap(campaign => setting.salts.map((salt) => {
+    const known = readings
+      .filter(row => row.lab === labName && row.campaign === campaign && row.anion === salt.anion)
+      .map((row): KnownReading => ({ id: v7(), row }))
+    const id = v7()
+    return {
+      id,
+      row: {
+        id,
+        project,
+        campaign: places.campaigns.get(campaignKey(labName, campaign))!,
+        stock: places.stocks.get(stockKey(labName, salt.anion))!,
+        saltFormula: salt.formula,
+        saltName: salt.name,
+        anion: salt.anion,
+        cation: 'Na^+',
+      },
+      revisions: historyOf(known, setting.labs[labName].recordedBy),
+    }
+  })))
+}
+
+/** A row as the table of readings holds it. The standard uncertainty of a mean is its replicates' scatter over √n. */
+function readingRow(project: string, places: Places, row: DemoReading, id: string, plan: SeriesPlan | null) {
+  return {
+    id,
+    project,
+    series: plan?.id ?? null,
+    batch: places.batches.get(batchKey(row.lab, row.day))!,
+    concentration: row.concentration,
+    composition: plan ? [{ salt: plan.row.saltFormula, value: row.concentration, unit: 'mol/L' as const, varied: true }] : [],
+    value: row.value,
+    sd: row.sdOfReplicates / Math.sqrt(row.n),
+    sdGiven: row.sdOfReplicates,
+    sdGivenMeaning: 'sd-of-replicates' as const,
+    n: row.n,
+    direction: 'heating' as const,
+    rate: truth.labs[row.lab as LabName].rate,
+    note: row.note || null,
+    origin: { kind: 'demonstration' as const },
+  }
+}
+
+async function plantRevisions(tx: Transaction, project: string, plan: SeriesPlan, people: ReadonlyMap<string, string>) {
+  for (const [index, revision] of plan.revisions.entries()) {
+    const id = v7()
+    const by = people.get(revision.by)!
+    await tx.insert(seriesRevision).values({ id, project, series: plan.id, number: index + 1, summary: revision.summary, madeBy: by, createdAt: revision.at })
+    await tx.insert(revisionReading).values(revision.readings.map(({ reading: { id: readingId, row }, isSetAside }, place) => ({
+      project,
+      revision: id,
+      reading: readingId,
+      number: place + 1,
+      ...(isSetAside ? { setAsideReason: row.setAsideReason, setAsideBy: by, setAsideAt: revision.at } : {}),
+    })))
+  }
+}
+
+/** Every reading that any revision holds, once. */
+function readingsOf(plan: SeriesPlan): KnownReading[] {
+  return [...new Map(plan.revisions.flatMap(revision => revision.readings.map(({ reading: known }) => [known.id, known] as const))).values()]
+}
+
+/** The invented measurements of the demonstration, with their history. */
+export const demo: Seed = {
+  name: 'demo',
+  async plant(tx) {
+    const project = await projectByName(tx, 'Shadehouse gel')
+    const readings = fromTable(table)
+    const places = await plantPlaces(tx, project, readings)
+    const plans = planSeries(project, places, readings)
+    const emails = [...new Set(plans.flatMap(plan => plan.revisions.map(revision => revision.by)))]
+    const people = new Map(await Promise.all(emails.map(async email => [email, await personByEmail(tx, email)] as const)))
+
+    await tx.insert(series).values(plans.map(plan => plan.row))
+    await tx.insert(reading).values([
+      ...readings.filter(row => !row.anion).map(row => readingRow(project, places, row, v7(), null)),
+      ...plans.flatMap(plan => readingsOf(plan).map(({ id, row }) => readingRow(project, places, row, id, plan))),
+    ])
+    for (const plan of plans) await plantRevisions(tx, project, plan, people)
+  },
+}
