@@ -1,5 +1,4 @@
 import { cp } from 'node:fs/promises'
-import { existsSync } from 'node:fs'
 import { bundle, root } from './bundle.mjs'
 
 const tools = {
@@ -8,13 +7,17 @@ const tools = {
   worker: 'server/jobs/worker.ts',
 }
 
+/** Threads are files of their own: taken into the server's bundle they would start a second server. */
+const threads = {
+  fit: 'server/workers/fit.ts',
+}
+
 /**
  * Puts the command-line tools and the worker threads beside the built server.
  * @param {string} serverDir where the server is built
  */
 export async function buildTools(serverDir) {
-  const present = Object.fromEntries(Object.entries(tools).filter(([, file]) => existsSync(`${root}/${file}`)))
-  await bundle(present, `${serverDir}/tools`)
-
+  await bundle(tools, `${serverDir}/tools`)
+  await bundle(threads, `${serverDir}/workers`)
   await cp(`${root}/server/database/migrations`, `${serverDir}/tools/migrations`, { recursive: true })
 }

@@ -4,6 +4,11 @@ import { projectRoles } from './me'
 
 export const projectParams = z.object({ project: id })
 
+export const newProjectContract = z.strictObject({
+  name: z.string().trim().min(1, 'must not be empty').max(120, 'must have at most 120 characters'),
+  question: z.string().trim().max(1_000, 'must have at most 1000 characters').nullish().describe('what the project wants to know'),
+})
+
 export const projectContract = z.object({
   id,
   name: z.string(),

@@ -1,6 +1,5 @@
 import { eq } from 'drizzle-orm'
 import { v7 } from 'uuid'
-import { sodiumSalts } from '#shared/science/chemistry/salts'
 import type { DemoReading } from '~~/data-seeds/demo/generate'
 import setting from '~~/data-seeds/demo/setting.json'
 import truth from '~~/data-seeds/demo/truth.json'
@@ -26,7 +25,7 @@ async function labIds(tx: Transaction): Promise<Map<string, string>> {
 }
 
 async function plantStocks(tx: Transaction, project: string, labs: ReadonlyMap<string, string>) {
-  const stocks = labNames.flatMap(labName => sodiumSalts.map((salt) => {
+  const stocks = labNames.flatMap(labName => setting.salts.map((salt) => {
     const aged = setting.agedStocks.find(one => one.lab === labName && one.anion === salt.anion)
     return {
       key: stockKey(labName, salt.anion),
@@ -37,7 +36,7 @@ async function plantStocks(tx: Transaction, project: string, labs: ReadonlyMap<s
         saltFormula: salt.formula,
         saltName: salt.name,
         anion: salt.anion,
-        cation: salt.cation,
+        cation: 'Na^+',
         lot: `${labName.slice(0, 1)}-${salt.formula}`,
         purity: setting.stocks.purity,
         madeOn: aged?.madeOn ?? setting.stocks.madeOn,

@@ -1,0 +1,18 @@
+import { defineNitroPlugin, sessionHooks } from '#imports'
+import { createError } from 'h3'
+import { closeDatabase } from '~~/server/database/client'
+import { sessionPerson } from '~~/server/services/sessions'
+import { closeFitPool } from '~~/server/services/fit-pool'
+
+/** Ends what is open when the process is asked to stop. */
+export default defineNitroPlugin((app) => {
+  app.hooks.hook('close', async () => {
+    await closeFitPool()
+    await closeDatabase()
+  })
+  // The page asks the session library who is signed in; a session revoked elsewhere is nobody's.
+  sessionHooks.hook('fetch', async (session) => {
+    const id = session.secure?.session
+    if (id && !await sessionPerson(id)) throw createError({ statusCode: 401, message: 'The session has ended' })
+  })
+})

@@ -1,0 +1,94 @@
+import { createHash } from 'node:crypto'
+import { desc, eq, inArray } from 'drizzle-orm'
+import { v7 } from 'uuid'
+import { ScienceError } from '#shared/science/errors'
+import { compareModels, fit as fitPoints } from '#shared/science/fitting'
+import type { FitResult, ModelName, Point } from '#shared/science/fitting/types'
+import { engine } from '#shared/science/version'
+import type { Transaction } from '~~/server/database/client'
+import { fit, fitBlank, fitResult, fitRevision, series, seriesRevision, type FitOptions } from '~~/server/database/schema'
+import { contentOf, type SeriesContent } from './series-content'
+
+/** How a series is to be fitted; without a model, the one its readings support. */
+export interface FitChoice {
+  model?: ModelName
+  options?: FitOptions
+}
+
+/** The readings that enter a fit: exact and not set aside, with the blanks of their batches. */
+export function pointsOf({ readings }: SeriesContent): Point[] {
+  return readings.filter(one => one.limit === 'exact' && !one.setAside).map(({ x, y, sd, n }) => ({
+    x, y, ...(sd !== null && { sd }), ...(n !== null && { n }),
+  }))
+}
+
+/** Readings with their numbers of samples are weighted by them; otherwise the engine's default holds. */
+export function usualOptions(points: readonly Point[]): FitOptions {
+  return points.every(point => point.n !== undefined) ? { weighting: 'replicates' } : {}
+}
+
+/** A binding term only where the readings ask for one, else the straight line. */
+function supportedModel(points: Point[], options: FitOptions): ModelName {
+  return compareModels({ ...options, points }).verdict === 'supported' ? 'linear-langmuir' : 'linear'
+}
+
+/**
+ * Fits the newest revision of a series and keeps the fit. Asked twice for the same thing it finds the fit that is there.
+ *
+ * @returns the fit's id, or null where the readings are too few for any model
+ */
+export async function fitSeries(tx: Transaction, who: string, id: string, choice: FitChoice = {}): Promise<string | null> {
+  const content = (await contentOf(tx, [id])).get(id)
+  const points = content ? pointsOf(content) : []
+  if (!content?.revision || points.length === 0) return null
+  const options = choice.options ?? usualOptions(points)
+  try {
+    const model = choice.model ?? supportedModel(points, options)
+    return await keepFit(tx, who, id, content, { model, options, result: fitPoints({ ...options, model, points }) })
+  }
+  catch (error) {
+    if (error instanceof ScienceError) return null
+    throw error
+  }
+}
+
+interface MadeFit { model: ModelName, options: FitOptions, result: FitResult }
+
+async function keepFit(tx: Transaction, who: string, id: string, { revision, readings }: SeriesContent, { model, options, result }: MadeFit) {
+  const blanks = readings.filter(one => one.blank).map(one => one.id)
+  const asked = { revisions: [revision!.id], blanks: [...blanks].sort(), model, options, engine: engine.version }
+  const fingerprint = createHash('sha256').update(JSON.stringify(asked)).digest('hex')
+  const [owner] = await tx.select({ project: series.project }).from(series).where(eq(series.id, id))
+  const project = owner!.project
+  const [made] = await tx.insert(fit)
+    .values({ id: v7(), project, model, options, engineVersion: engine.version, fingerprint, madeBy: who })
+    .onConflictDoNothing({ target: fit.fingerprint }).returning({ id: fit.id })
+  if (!made) {
+    const [there] = await tx.select({ id: fit.id }).from(fit).where(eq(fit.fingerprint, fingerprint))
+    return there!.id
+  }
+  await tx.insert(fitRevision).values({ project, fit: made.id, revision: revision!.id })
+  if (blanks.length > 0) await tx.insert(fitBlank).values(blanks.map(reading => ({ project, fit: made.id, reading })))
+  await tx.insert(fitResult).values({ project, fit: made.id, kind: 'estimate', result })
+  return made.id
+}
+
+/** The newest fit of each revision, by the revision's id. */
+export async function currentFits(tx: Transaction, revisions: readonly string[]): Promise<Map<string, FitResult & { id: string }>> {
+  if (revisions.length === 0) return new Map()
+  const rows = await tx.selectDistinctOn([fitRevision.revision], { revision: fitRevision.revision, id: fit.id, result: fitResult.result })
+    .from(fitRevision).innerJoin(fit, eq(fit.id, fitRevision.fit))
+    .innerJoin(fitResult, eq(fitResult.fit, fit.id))
+    .where(inArray(fitRevision.revision, [...revisions]))
+    .orderBy(fitRevision.revision, desc(fit.createdAt), desc(fit.id), fitResult.createdAt)
+  return new Map(rows.map(({ revision, id, result }) => [revision, { ...result, id }]))
+}
+
+/** How a series was fitted last, whatever its revision then. */
+export async function lastChoice(tx: Transaction, id: string): Promise<FitChoice> {
+  const [last] = await tx.select({ model: fit.model, options: fit.options }).from(fit)
+    .innerJoin(fitRevision, eq(fitRevision.fit, fit.id))
+    .innerJoin(seriesRevision, eq(seriesRevision.id, fitRevision.revision))
+    .where(eq(seriesRevision.series, id)).orderBy(desc(fit.createdAt), desc(fit.id)).limit(1)
+  return last && last.model !== 'expression' ? { model: last.model, options: last.options } : {}
+}

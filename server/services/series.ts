@@ -1,0 +1,112 @@
+import { and, asc, desc, eq, gt, isNull } from 'drizzle-orm'
+import type { Series, SeriesSummary } from '#shared/contracts/series'
+import { ScienceError } from '#shared/science/errors'
+import { compareModels } from '#shared/science/fitting'
+import { asPerson, type Transaction } from '~~/server/database/client'
+import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
+import { conditionsOf } from './conditions'
+import { currentFits, pointsOf, usualOptions } from './fits'
+import { cursorOf, pageOf, type Page } from './pages'
+import { contentOf, type SeriesContent } from './series-content'
+
+/** The project of a series that a person may see; null where there is nothing to see. */
+export function seriesProject(who: string, id: string): Promise<string | null> {
+  return asPerson(who, async (tx) => {
+    const [found] = await tx.select({ project: series.project }).from(series).where(and(eq(series.id, id), isNull(series.deletedAt)))
+    return found?.project ?? null
+  })
+}
+
+const heads = (tx: Transaction) => tx
+  .select({ series, campaign, lab, stock, sample, project: { id: project.id, name: project.name } })
+  .from(series)
+  .innerJoin(project, eq(project.id, series.project))
+  .innerJoin(campaign, eq(campaign.id, series.campaign))
+  .innerJoin(lab, eq(lab.id, campaign.lab))
+  .leftJoin(stock, eq(stock.id, series.stock))
+  .leftJoin(sample, eq(sample.id, campaign.sample))
+  .$dynamic()
+type Head = Awaited<ReturnType<typeof heads>>[number]
+
+/** The series of a project with their newest readings and fits, in the order they were made. */
+export function listSeries(who: string, id: string, page: Page) {
+  return asPerson(who, async (tx) => {
+    const rows = await heads(tx)
+      .where(and(eq(series.project, id), isNull(series.deletedAt), page.cursor ? gt(series.id, cursorOf(page.cursor)) : undefined))
+      .orderBy(asc(series.id)).limit(page.limit + 1)
+    const { items, nextCursor } = pageOf(rows.map(head => ({ id: head.series.id, head })), page.limit)
+    const contents = await contentOf(tx, items.map(item => item.id))
+    const fits = await currentFits(tx, [...contents.values()].flatMap(({ revision }) => revision?.id ?? []))
+    return { items: items.map(({ head }) => summaryOf(head, contents.get(head.series.id)!, fits)), nextCursor }
+  })
+}
+
+function summaryOf(head: Head, content: SeriesContent, fits: Awaited<ReturnType<typeof currentFits>>): SeriesSummary {
+  return {
+    id: head.series.id,
+    salt: saltOf(head),
+    campaign: campaignOf(head),
+    stock: stockOf(head, content.firstDay),
+    revision: content.revision?.number ?? null,
+    readings: content.readings.map(({ id, x, y, limit, setAside, blank }) => ({ id, x, y, limit, setAside: setAside !== null, blank })),
+    fit: (content.revision && fits.get(content.revision.id)) ?? null,
+  }
+}
+
+/** One series: readings, current fit, how the models compare, revisions. */
+export function showSeries(who: string, id: string): Promise<Series> {
+  return asPerson(who, async (tx) => {
+    const [found] = await heads(tx).where(eq(series.id, id))
+    const head = found!
+    const content = (await contentOf(tx, [id])).get(id)!
+    const fits = await currentFits(tx, content.revision ? [content.revision.id] : [])
+    return {
+      id,
+      project: head.project,
+      salt: saltOf(head),
+      campaign: { ...campaignOf(head), conditions: conditionsOf(head) },
+      revision: content.revision?.number ?? null,
+      readings: content.readings,
+      fit: (content.revision && fits.get(content.revision.id)) ?? null,
+      support: supportFor(content),
+      revisions: await revisionsOf(tx, id),
+    }
+  })
+}
+
+async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisions']> {
+  const rows = await tx.select({ number: seriesRevision.number, summary: seriesRevision.summary, by: person.name, at: seriesRevision.createdAt })
+    .from(seriesRevision).leftJoin(person, eq(person.id, seriesRevision.madeBy))
+    .where(eq(seriesRevision.series, id)).orderBy(desc(seriesRevision.number))
+  return rows.map(({ by, at, ...row }) => ({ ...row, by: by ?? 'a former member', at: at.toISOString() }))
+}
+
+function supportFor(content: SeriesContent): Series['support'] {
+  const points = pointsOf(content)
+  if (points.length === 0) return { verdict: null, models: [] }
+  try {
+    const { verdict, models } = compareModels({ ...usualOptions(points), points })
+    return { verdict, models }
+  }
+  catch (error) {
+    // Readings that no model takes are no failure of the page: it shows them without a comparison.
+    if (error instanceof ScienceError) return { verdict: null, models: [] }
+    throw error
+  }
+}
+
+function saltOf({ series: { saltFormula, saltName, anion, cation } }: Head) {
+  return { formula: saltFormula, name: saltName, anion, cation }
+}
+
+function campaignOf({ campaign: { id, name, clouds }, lab }: Head) {
+  return { id, name, clouds, lab: { id: lab.id, name: lab.name } }
+}
+
+const millisecondsPerMonth = 365.25 / 12 * 86_400_000
+
+function stockOf({ stock: used }: Head, firstDay: string | null): SeriesSummary['stock'] {
+  if (!used?.lot) return null
+  const age = used.madeOn && firstDay ? (Date.parse(firstDay) - Date.parse(used.madeOn)) / millisecondsPerMonth : null
+  return { lot: used.lot, madeOn: used.madeOn, ageAtUse: age }
+}

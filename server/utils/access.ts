@@ -1,0 +1,94 @@
+import type { H3Event } from 'h3'
+import { jobRight } from '~~/server/services/jobs'
+import { projectRight, type ProjectRole } from '~~/server/services/projects'
+import { seriesProject } from '~~/server/services/series'
+import { ServiceError } from '~~/server/services/errors'
+import type { Visitor } from '~~/server/services/sessions'
+import { visitorOf } from './visitor'
+
+/** Who may call a route. The name stands in the access table; the sentence in the API's description. */
+export interface AccessRule<Person extends Visitor | null = Visitor | null> {
+  name: string
+  sentence: string
+  /** Lets the caller in or refuses: 401 signed out, 404 what one may not see, 403 what one may see but not do. */
+  admit: (event: H3Event, params: Record<string, string>) => Promise<Person>
+}
+
+const editing: readonly ProjectRole[] = ['owner', 'editor']
+
+async function signedInVisitor(event: H3Event): Promise<Visitor> {
+  const visitor = await visitorOf(event)
+  if (!visitor) throw new ServiceError('signed-out', 'This needs an account. Sign in, then try again.')
+  return visitor
+}
+
+export const nowhere = () => new ServiceError('not-found', 'There is nothing at this address, or it is not yours to see.')
+
+async function admitToProject(visitor: Visitor, project: string | null, mustEdit: boolean) {
+  const role = project && await projectRight(visitor.id, project)
+  if (!role) throw nowhere()
+  if (mustEdit && !editing.includes(role)) {
+    throw new ServiceError('forbidden', 'You read this project but do not change it. Ask its owner to make you an editor.')
+  }
+  return visitor
+}
+
+export const anyone: AccessRule = {
+  name: 'anyone',
+  sentence: 'Anyone, without an account.',
+  admit: async () => null,
+}
+
+export const signedIn: AccessRule<Visitor> = {
+  name: 'signedIn',
+  sentence: 'Anyone with an account.',
+  admit: signedInVisitor,
+}
+
+export const projectMember: AccessRule<Visitor> = {
+  name: 'projectMember',
+  sentence: 'Members of the project.',
+  admit: async (event, params) => admitToProject(await signedInVisitor(event), params.project!, false),
+}
+
+export const projectEditor: AccessRule<Visitor> = {
+  name: 'projectEditor',
+  sentence: 'Owners and editors of the project.',
+  admit: async (event, params) => admitToProject(await signedInVisitor(event), params.project!, true),
+}
+
+export const seriesReader: AccessRule<Visitor> = {
+  name: 'seriesReader',
+  sentence: 'Members of the project that holds the series.',
+  async admit(event, params) {
+    const visitor = await signedInVisitor(event)
+    return admitToProject(visitor, await seriesProject(visitor.id, params.series!), false)
+  },
+}
+
+function jobRule(name: string, sentence: string, wanted: 'own' | 'see'): AccessRule<Visitor> {
+  return {
+    name,
+    sentence,
+    async admit(event, params) {
+      const visitor = await signedInVisitor(event)
+      const right = await jobRight(visitor.id, params.job!)
+      if (!right) throw nowhere()
+      if (wanted === 'own' && right !== 'own') throw new ServiceError('forbidden', 'Only the person who started a job can stop it.')
+      return visitor
+    },
+  }
+}
+
+export const jobWatcher = jobRule('jobWatcher', 'The person who started the job and the members of its project.', 'see')
+export const jobOwner = jobRule('jobOwner', 'The person who started the job.', 'own')
+
+export const siteAdmin: AccessRule<Visitor> = {
+  name: 'siteAdmin',
+  sentence: 'Administrators of this installation.',
+  async admit(event) {
+    const visitor = await signedInVisitor(event)
+    if (!visitor.siteRoles.includes('admin')) throw nowhere()
+    return visitor
+  },
+}
