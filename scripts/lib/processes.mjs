@@ -16,6 +16,20 @@ export function startedAt(pid) {
   }
 }
 
+/**
+ * Watches a process that is not our child.
+ * @param {number} pid @param {() => void} react
+ * @returns {() => void} ends the watch
+ */
+export function whenGone(pid, react) {
+  const watch = setInterval(() => {
+    if (startedAt(pid) !== null) return
+    clearInterval(watch)
+    react()
+  }, 500)
+  return () => clearInterval(watch)
+}
+
 /** @param {number} milliseconds @returns {Promise<void>} */
 export function pause(milliseconds) {
   return new Promise(done => setTimeout(done, milliseconds))

@@ -64,9 +64,10 @@ export async function check(command, env) {
 
 /**
  * Runs tests and counts them from the runner's JSON report.
+ * @template RunnerReport
  * @param {string[]} command @param {NodeJS.ProcessEnv} env
  * @param {string} reportFile where the runner writes its report
- * @param {(report: any) => Counts} count
+ * @param {(report: RunnerReport) => Counts} count
  * @returns {Promise<Counts>}
  */
 export async function countTests(command, env, reportFile, count) {
@@ -76,12 +77,19 @@ export async function countTests(command, env, reportFile, count) {
   return { passed: counts.passed, failed: code === 0 ? counts.failed : Math.max(1, counts.failed) }
 }
 
-/** A skipped test is an unkept promise: it counts as failed. @param {any} report @returns {Counts} */
+/**
+ * A test that was left out is an unkept promise: it counts as failed.
+ * @param {{ numPassedTests: number, numFailedTests: number, numPendingTests: number, numTodoTests: number }} report
+ * @returns {Counts}
+ */
 export function countVitest({ numPassedTests, numFailedTests, numPendingTests, numTodoTests }) {
   return { passed: numPassedTests, failed: numFailedTests + numPendingTests + numTodoTests }
 }
 
-/** @param {any} report @returns {Counts} */
+/**
+ * @param {{ stats: { expected: number, unexpected: number, flaky: number, skipped: number }, errors: unknown[] }} report
+ * @returns {Counts}
+ */
 export function countPlaywright({ stats, errors }) {
   return { passed: stats.expected, failed: stats.unexpected + stats.flaky + stats.skipped + errors.length }
 }

@@ -3,7 +3,7 @@ import { backUpBeforeMigrating } from './backup.mjs'
 import { lastWords, startChild } from './children.mjs'
 import { startCluster } from './postgres/cluster.mjs'
 import { databaseUrls, makeRoles } from './postgres/roles.mjs'
-import { until } from './processes.mjs'
+import { until, whenGone } from './processes.mjs'
 import { must } from './run.mjs'
 import { appSettings, serviceSettings } from './settings.mjs'
 import { StopSentence } from './stop-sentence.mjs'
@@ -25,11 +25,11 @@ const READY_WITHIN_SECONDS = 60
  * @returns {Promise<Stack>}
  */
 export async function startStack(session, data, address) {
-  const database = await startDatabase(session, data)
+  const children = new Children(session, join(data, 'logs'))
+  const database = await startDatabase(session, data, children)
   session.checkpoint()
   const { env: serviceEnv, objectsPort, mailPort } = await serviceSettings(data)
   const env = { ...appSettings(data, address), ...serviceEnv, DATABASE_URL: database.DATABASE_URL }
-  const children = new Children(session, join(data, 'logs'))
   if (objectsPort) children.start('object store', 'scripts/standins/object-store.mjs', { ...env, STANDIN_PORT: String(objectsPort), STANDIN_FOLDER: join(data, 'objects') })
   if (mailPort) children.start('mail', 'scripts/standins/mail.mjs', { ...env, STANDIN_PORT: String(mailPort), STANDIN_FOLDER: join(data, 'mail') })
   children.start('worker', `${TOOLS}/worker.mjs`, env)
@@ -42,10 +42,10 @@ export async function startStack(session, data, address) {
 
 /**
  * The database, migrated and seeded; a real one when DATABASE_URL names it.
- * @param {import('./session.mjs').Session} session @param {string} data
+ * @param {import('./session.mjs').Session} session @param {string} data @param {Children} children
  */
-async function startDatabase(session, data) {
-  const urls = await externalDatabase() ?? await ownDatabase(session, data)
+async function startDatabase(session, data, children) {
+  const urls = await externalDatabase() ?? await ownDatabase(session, data, children)
   const env = { ...urls, ANIONARY_DEMO: process.env.ANIONARY_DEMO || '1' }
   await must([process.execPath, `${TOOLS}/migrate.mjs`], { env })
   session.checkpoint()
@@ -60,10 +60,11 @@ async function externalDatabase() {
   throw new StopSentence('DATABASE_URL is set and DATABASE_OWNER_URL is not: migrations need the owner of that database.')
 }
 
-/** @param {import('./session.mjs').Session} session @param {string} data */
-async function ownDatabase(session, data) {
+/** @param {import('./session.mjs').Session} session @param {string} data @param {Children} children */
+async function ownDatabase(session, data, children) {
   const cluster = await startCluster(data)
   session.onEnd(cluster.stop)
+  session.onEnd(whenGone(cluster.pid, () => children.break(`PostgreSQL (process ${cluster.pid}) ended by itself; its log: ${cluster.folder}/server.log`)))
   if (cluster.isAdopted) console.log(`PostgreSQL was still running after a crash (process ${cluster.pid}): taken over.`)
   await makeRoles(cluster, data)
   await backUpBeforeMigrating(cluster, data)
@@ -76,6 +77,8 @@ class Children {
   constructor(session, logs) {
     this.session = session
     this.logs = logs
+    /** @type {(sentence: string) => void} */
+    this.break = () => {}
     /** @type {Promise<string>} */
     this.broken = new Promise((settle) => {
       this.break = settle

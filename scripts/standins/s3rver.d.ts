@@ -1,8 +1,8 @@
 // s3rver brings no types; these are the parts the stand-in uses.
 declare module 's3rver' {
+  import type { RequestListener } from 'node:http'
+
   interface Options {
-    address: string
-    port: number
     directory: string
     silent: boolean
     vhostBuckets: boolean
@@ -10,16 +10,12 @@ declare module 's3rver' {
   }
   export default class S3rver {
     constructor(options: Options)
-    run(): Promise<{ port: number }>
-    close(): Promise<void>
+    configureBuckets(): Promise<void>
+    callback(): RequestListener
   }
 }
 
 declare module 's3rver/lib/models/account.js' {
-  interface Account {
-    createKeyPair(id: string, secret: string): void
-    revokeAccessKey(id: string): void
-  }
-  const account: { DUMMY_ACCOUNT: Account }
-  export default account
+  const accounts: { DUMMY_ACCOUNT: { createKeyPair(id: string, secret: string): void } }
+  export default accounts
 }
