@@ -1,5 +1,6 @@
 import { eq } from 'drizzle-orm'
 import { v7 } from 'uuid'
+import { sodiumSalts } from '#shared/science/chemistry/salts'
 import type { DemoReading } from '~~/data-seeds/demo/generate'
 import setting from '~~/data-seeds/demo/setting.json'
 import truth from '~~/data-seeds/demo/truth.json'
@@ -25,7 +26,7 @@ async function labIds(tx: Transaction): Promise<Map<string, string>> {
 }
 
 async function plantStocks(tx: Transaction, project: string, labs: ReadonlyMap<string, string>) {
-  const stocks = labNames.flatMap(labName => setting.salts.map((salt) => {
+  const stocks = labNames.flatMap(labName => sodiumSalts.map((salt) => {
     const aged = setting.agedStocks.find(one => one.lab === labName && one.anion === salt.anion)
     return {
       key: stockKey(labName, salt.anion),
@@ -36,7 +37,7 @@ async function plantStocks(tx: Transaction, project: string, labs: ReadonlyMap<s
         saltFormula: salt.formula,
         saltName: salt.name,
         anion: salt.anion,
-        cation: 'Na^+',
+        cation: salt.cation,
         lot: `${labName.slice(0, 1)}-${salt.formula}`,
         purity: setting.stocks.purity,
         madeOn: aged?.madeOn ?? setting.stocks.madeOn,

@@ -1,4 +1,5 @@
 import { v7 } from 'uuid'
+import { sodiumSalts } from '#shared/science/chemistry/salts'
 import { fromTable } from '~~/data-seeds/demo/csv'
 import type { DemoReading } from '~~/data-seeds/demo/generate'
 import table from '~~/data-seeds/demo/readings.tsv'
@@ -20,7 +21,7 @@ const campaignNames = ['spring', 'autumn']
 
 /** Every salt in every campaign has a series, also where nobody has measured yet. */
 function planSeries(project: string, places: Places, readings: readonly DemoReading[]): SeriesPlan[] {
-  return labNames.flatMap(labName => campaignNames.flatMap(campaign => setting.salts.map((salt) => {
+  return labNames.flatMap(labName => campaignNames.flatMap(campaign => sodiumSalts.map((salt) => {
     const known = readings
       .filter(row => row.lab === labName && row.campaign === campaign && row.anion === salt.anion)
       .map((row): KnownReading => ({ id: v7(), row }))
@@ -35,7 +36,7 @@ function planSeries(project: string, places: Places, readings: readonly DemoRead
         saltFormula: salt.formula,
         saltName: salt.name,
         anion: salt.anion,
-        cation: 'Na^+',
+        cation: salt.cation,
       },
       revisions: historyOf(known, setting.labs[labName].recordedBy),
     }

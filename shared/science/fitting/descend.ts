@@ -30,6 +30,8 @@ const smallestDamping = 1e-14
 const initialDampings = [1e-3, 1]
 /** A point this close to stationary is left to the polish. */
 const nearlyStationary = 1e-6
+/** Large residuals make Gauss–Newton converge by a factor a step, not by doubling digits. */
+const polishRounds = 30
 
 export function unbounded(size: number): Bounds {
   return { lower: new Float64Array(size).fill(-Infinity), upper: new Float64Array(size).fill(Infinity) }
@@ -155,7 +157,7 @@ function settle(objective: Objective, point: Float64Array, bounds: Bounds): Desc
   const inside = movable(objective, point, bounds, residuals, jacobian)
   if (inside.length === 0) return { point, sum: sumOfSquares(residuals), stationary: null, inside, stopReason: 'bound' }
   const part = restrict(objective, point, inside)
-  let stationary = polish(part, Float64Array.from(inside, j => point[j]!))
+  let stationary = polish(part, Float64Array.from(inside, j => point[j]!), polishRounds)
   const isWithin = inside.every((at, j) => stationary.point[j]! >= bounds.lower[at]! && stationary.point[j]! <= bounds.upper[at]!)
   if (!isWithin) stationary = polish(part, Float64Array.from(inside, j => point[j]!), 0)
   const whole = point.slice()

@@ -1,4 +1,5 @@
 /** Profile intervals by holding one parameter at trial values and fitting the others again. */
+import { backSubstitute, isDeficient, triangularize } from '../numeric/qr'
 import { findRoot } from '../numeric/roots'
 import type { Ends } from './conditional-intervals'
 import { descendFrom, restrict, type Bounds } from './descend'
@@ -6,7 +7,10 @@ import { sumOfSquares, type Objective } from './objective'
 
 const doublings = 30
 const iterationsEach = 40
-const relativeTolerance = 1e-9
+const relativeTolerance = 1e-8
+const slideRounds = 15
+/** A trial fit is done when another step promises less than this share of the threshold. */
+const promisedShare = 1e-10
 
 /**
  * @param point the optimum, one value for each coordinate of the objective
@@ -49,12 +53,48 @@ function profileExcess(objective: Objective, point: Float64Array, bounds: Bounds
       whole[index] = value
       const held = restrict(objective, whole, others)
       if (others.length === 0) return sumAt(objective, whole) - threshold
-      const found = descendFrom(held, latest, partBounds, 1e-3, iterationsEach)
+      const near = slide(held, latest, partBounds, threshold)
+      const found = near ?? descendFrom(held, latest, partBounds, 1e-3, iterationsEach)
       if (!Number.isFinite(found.sum)) return Infinity
       latest = found.point
       return found.sum - threshold
     }
   }
+}
+
+/** Gauss–Newton from a close start, with halved steps; null where it does not settle inside the bounds. */
+function slide(objective: Objective, start: Float64Array, bounds: Bounds, threshold: number): { point: Float64Array, sum: number } | null {
+  const { readings: n, size: p } = objective
+  const residuals = new Float64Array(n)
+  const triangle = new Float64Array(n * p)
+  const step = new Float64Array(p)
+  let point = start
+  objective.residuals(point, residuals)
+  let sum = sumOfSquares(residuals)
+  for (let round = 0; round < slideRounds; round++) {
+    objective.jacobian(point, triangle)
+    triangularize(triangle, n, p, residuals)
+    if (isDeficient(triangle, n, p, 1e-12)) return null
+    let promised = 0
+    for (let i = 0; i < p; i++) promised += residuals[i]! * residuals[i]!
+    if (promised < promisedShare * threshold) return { point, sum }
+    backSubstitute(triangle, n, p, residuals, step)
+    const next = shorten(objective, point, step, sum, residuals)
+    if (!next || next.point.some((value, j) => value < bounds.lower[j]! || value > bounds.upper[j]!)) return null
+    point = next.point
+    sum = next.sum
+  }
+  return null
+}
+
+function shorten(objective: Objective, from: Float64Array, step: Float64Array, before: number, residuals: Float64Array) {
+  for (let share = 1; share > 0.05; share /= 2) {
+    const point = from.map((value, j) => value - share * step[j]!)
+    objective.residuals(point, residuals)
+    const sum = sumOfSquares(residuals)
+    if (sum < before) return { point, sum }
+  }
+  return null
 }
 
 function sumAt(objective: Objective, point: Float64Array): number {

@@ -161,7 +161,7 @@ function refitEnds({ solution, free, covariance, variance }: Analysis, errors: M
   if (!covariance || variance === null || objective.size !== free.length) return new Map()
   return new Map(free.map((j, at) => {
     const error = errors.get(problem.model.parameters[j]!.name)
-    const step = error ? error / units[j]! : 0.1 * (Math.abs(values[j]!) || 1)
+    const step = error ? Math.sqrt(delta / variance) * error / units[j]! : 0.1 * (Math.abs(values[j]!) || 1)
     return [j, refitInterval(objective, point, bounds, at, step, solution.sum + delta)]
   }))
 }

@@ -58,6 +58,7 @@ export function solve(problem: Problem): Solution {
 
 /** K is the only free shape, Bmax is free, and the model has the plain binding term. */
 export function canProfile({ model, held }: Problem): boolean {
+  if (model.name === 'expression') return false
   const k = indexOf(model, 'K')
   const bmax = indexOf(model, 'Bmax')
   return k >= 0 && Number.isNaN(held[k]) && Number.isNaN(held[bmax]) && indexOf(model, 'h') < 0

@@ -10,7 +10,7 @@ export interface ParameterDefinition {
   xPower: 0 | -1 | -2
   /** Moves with the origin of y. */
   isLevel?: true
-  /** The model is not linear in it; only positive values make sense. */
+  /** The model is not linear in it. */
   isShape?: true
 }
 
@@ -24,7 +24,7 @@ export interface DerivedValue {
 
 /** y as a function of x with named parameters; the same function holds on scaled axes. */
 export interface Model {
-  name: ModelName
+  name: ModelName | 'expression'
   parameters: readonly ParameterDefinition[]
   /** @returns y at x; both on the axes of the parameters */
   value(parameters: ArrayLike<number>, x: number): number

@@ -1,0 +1,121 @@
+import { describe, expect, it } from 'vitest'
+import { fit } from '#shared/science/fitting'
+import { figureContent, type FigureSource } from '~~/components/chart/figure/content'
+import { frameOf } from '~~/components/chart/figure/frame'
+import { figureLayers, figureOption } from '~~/components/chart/figure/option'
+import type { Shape } from '~~/components/chart/figure/shapes'
+import type { FigureReading, Palette } from '~~/components/chart/figure/types'
+
+/** Invented readings of the usual shape: raised at first, lowered later. */
+const readings: FigureReading[] = [
+  [0, 31.0], [0.02, 31.27], [0.05, 31.56], [0.12, 31.91], [0.2, 32.09], [0.3, 32.07], [0.4, 31.86], [0.6, 31.47], [0.7, 31.15], [1, 30.17],
+].map(([x = 0, y = 0], index) => ({ number: index + 1, x, y }))
+
+const binding = fit({ model: 'linear-langmuir', points: readings.map(({ x, y }) => ({ x, y })) })
+const line = fit({ model: 'linear', points: readings.map(({ x, y }) => ({ x, y })) })
+
+const palette: Palette = {
+  paper: 'paper', ink: 'ink', ink2: 'ink2', rule: 'rule', hair: 'hair', error: 'error', haze: 'haze', hazeOpacity: 0.6, bandOpacity: 0.26, front: 'front',
+}
+
+function layersOf(source: Partial<FigureSource>, width = 720, height = 480) {
+  const content = figureContent({ readings, fit: binding, ion: 'SCN^-', ...source })
+  const frame = frameOf(content, width, height)
+  const layers = figureLayers(content, frame, palette)
+  return { frame, shapes: (name: string) => layers.find(layer => layer.name === name)?.shapes ?? [] }
+}
+
+function texts(shapes: readonly Shape[]): string[] {
+  return shapes.flatMap(shape => shape.kind === 'text' ? [shape.runs.map(run => run.text).join('')] : [])
+}
+
+describe('figureLayers', () => {
+  it('labels the curve with the ion at its end and marks where it turns, with uncertainties', () => {
+    const words = texts(layersOf({}).shapes('words'))
+    expect(words).toContain('SCN−')
+    expect(words.find(word => word.startsWith('highest point'))).toMatch(/^highest point \+1\.0\d+\(\d\d\) K at 0\.2\d+\(\d\d\) M$/)
+  })
+
+  it('names both phases, cloudy above the curve when the system clouds on heating', () => {
+    const { shapes } = layersOf({})
+    const place = (word: string) => shapes('words').find(shape => shape.kind === 'text' && shape.runs[0]?.text === word) as Extract<Shape, { kind: 'text' }>
+    expect(place('cloudy').y).toBeLessThan(place('clear').y)
+  })
+
+  it('puts the stipple below the curve when the system clouds on cooling', () => {
+    const heights = (clouds: 'on-heating' | 'on-cooling') => layersOf({ clouds }).shapes('stipple')
+      .flatMap(shape => shape.kind === 'path' ? [...shape.d.matchAll(/M[\d.]+ ([\d.]+)/g)].map(([, y]) => Number(y)) : [])
+    const mean = (values: number[]) => values.reduce((sum, value) => sum + value, 0) / values.length
+    expect(mean(heights('on-cooling'))).toBeGreaterThan(mean(heights('on-heating')))
+  })
+
+  it('draws the curve dotted beyond the readings', () => {
+    const inner = [...readings.slice(1, 7), { number: 8, x: 0.43, y: 31.8 }]
+    const curves = layersOf({ readings: inner }).shapes('curve')
+    expect(curves.map(shape => shape.kind === 'path' && shape.dash !== undefined)).toEqual([true, false, true])
+  })
+
+  it('draws blanks as grey rings and readings set aside with a slash', () => {
+    const aside = [...readings, { number: 11, x: 0.5, y: 31.27, setAside: true, key: 'a' }]
+    const drawn = layersOf({ readings: aside }).shapes('readings')
+    expect(drawn.filter(shape => shape.kind === 'path' && shape.stroke === 'ink2')).toHaveLength(3)
+    expect(texts(drawn)).toEqual(['a'])
+  })
+
+  it('stands a residual beyond its axis at the edge with its value and an arrow', () => {
+    const aside = [...readings, { number: 11, x: 0.5, y: 31.27, setAside: true }]
+    expect(texts(layersOf({ readings: aside }).shapes('residuals'))).toEqual([expect.stringMatching(/^−0\.4\d K ↓$/)])
+  })
+
+  it('draws an arrow where a reading only bounds the cloud point', () => {
+    const bounded: FigureReading[] = [...readings, { number: 11, x: 0.9, y: 30, limit: 'below' }]
+    const [all, some] = [layersOf({ readings: bounded }), layersOf({})]
+    expect(all.shapes('readings').length - some.shapes('readings').length).toBe(2)
+    expect(all.shapes('residuals')).toHaveLength(some.shapes('residuals').length)
+  })
+
+  it('draws the straight line only when it is asked for', () => {
+    expect(layersOf({}).shapes('straight line')).toEqual([])
+    expect(texts(layersOf({ straightLine: line }).shapes('straight line'))).toEqual(['straight line alone'])
+  })
+
+  it('marks a row that cannot be drawn on the axis', () => {
+    expect(texts(layersOf({ gaps: [{ x: 0.8, text: 'row 10' }] }).shapes('words'))).toContain('row 10')
+  })
+
+  it.each([320, 358, 520, 720, 1100])('keeps every word inside a figure of %d px', (width) => {
+    const { shapes } = layersOf({}, width, 400)
+    for (const shape of shapes('words')) {
+      if (shape.kind !== 'text') continue
+      expect(shape.x).toBeGreaterThanOrEqual(0)
+      expect(shape.x).toBeLessThanOrEqual(width)
+    }
+  })
+
+  it('keeps axes, a sketched curve and the stipple when there is nothing to draw', () => {
+    const { shapes } = layersOf({ readings: [], fit: null })
+    expect(shapes('curve')).toHaveLength(1)
+    expect(shapes('stipple').length).toBeGreaterThan(0)
+    expect([...shapes('readings'), ...shapes('band'), ...shapes('residuals')]).toEqual([])
+  })
+
+  it('draws readings without a curve when none is supported', () => {
+    const { shapes } = layersOf({ fit: null })
+    expect(shapes('readings').length).toBeGreaterThan(0)
+    expect([...shapes('curve'), ...shapes('stipple'), ...shapes('residuals')]).toEqual([])
+  })
+})
+
+describe('figureOption', () => {
+  it('puts both plots on one concentration axis and gives each layer a series', () => {
+    const option = figureOption(figureContent({ readings, fit: binding, ion: 'SCN^-' }), 720, 480, palette) as {
+      grid: { left: number, width: number }[]
+      xAxis: { min: number, max: number }[]
+      series: { id: string, silent: boolean }[]
+    }
+    expect(option.grid[0]).toMatchObject({ left: option.grid[1]!.left, width: option.grid[1]!.width })
+    expect(option.xAxis[0]).toMatchObject({ min: 0, max: option.xAxis[1]!.max })
+    expect(option.series.map(series => series.id)).toContain('band')
+    expect(option.series.every(series => series.silent)).toBe(true)
+  })
+})
