@@ -1,5 +1,5 @@
 import type { Frame } from './frame'
-import { line, polyline, type PathShape, type Shape } from './shapes'
+import { line, plainText, polyline, type PathShape, type Shape } from './shapes'
 import type { CurveSamples, FigureContent, Palette } from './types'
 
 const beyond = [1.5, 3.5]
@@ -47,7 +47,7 @@ export function straightLineShapes({ straightLine }: FigureContent, frame: Frame
   const y = start[1] + (end[1] - start[1]) * 0.12 + 14
   return [
     { kind: 'path', d: polyline(points), stroke: palette.ink2, width: 1.2, dash: dashes },
-    { kind: 'text', runs: [{ text: 'straight line alone', level: 'base' }], x, y, align: 'left', size: 12, fill: palette.ink2, isItalic: true, halo: palette.paper },
+    { kind: 'text', runs: plainText('straight line alone'), x, y, align: 'left', size: 12, fill: palette.ink2, isItalic: true, halo: palette.paper },
   ]
 }
 

@@ -1,4 +1,5 @@
-import type { Shape, TextRun, TextShape } from './shapes'
+import type { FormulaPiece } from '#shared/science/chemistry/ions'
+import type { Shape, TextShape } from './shapes'
 
 const families = { sans: '\'IBM Plex Sans\', system-ui, sans-serif', mono: '\'IBM Plex Mono\', ui-monospace, monospace' } as const
 
@@ -6,8 +7,8 @@ const families = { sans: '\'IBM Plex Sans\', system-ui, sans-serif', mono: '\'IB
 const smaller = 0.72
 const shift = { sub: 0.68, sup: 0.68 } as const
 
-function markup(run: TextRun): string {
-  return run.level === 'base' ? run.text : `{${run.level}|${run.text}}`
+function markup({ text, place }: FormulaPiece): string {
+  return place ? `{${place}|${text}}` : text
 }
 
 function font(shape: TextShape, size: number): string {

@@ -4,8 +4,8 @@ import type { Axis } from './axis'
 import { bandShapes, curveShapes, noSaltShapes, straightLineShapes } from './curves'
 import { frameOf, type Frame, type Rectangle } from './frame'
 import { readingShapes, residualShapes } from './marks'
-import { line, type PathShape, type Shape } from './shapes'
-import { stipple } from './stipple'
+import { line, plainText, type PathShape, type Shape } from './shapes'
+import { dotsPath, stipple } from './stipple'
 import { toElement } from './elements'
 import type { FigureContent, Palette } from './types'
 import { curveHeight, placeWords } from './words'
@@ -24,7 +24,7 @@ function stippleShapes(content: FigureContent, frame: Frame, palette: Palette, b
     area: { left, top, right: left + width, bottom: top + height }, curve, boxes,
     side: content.clouds === 'on-heating' ? 'above' : 'below',
   })
-  return layers.map(({ radius, path }) => ({ kind: 'path', d: path, stroke: palette.haze, width: radius * 2, opacity: palette.hazeOpacity }))
+  return layers.map(({ radius, dots }) => ({ kind: 'path', d: dotsPath(dots), stroke: palette.haze, width: radius * 2, opacity: palette.hazeOpacity }))
 }
 
 function residualRules(frame: Frame, palette: Palette): Shape[] {
@@ -40,10 +40,10 @@ function axisNames(frame: Frame, palette: Palette): Shape[] {
   const foot = frame.residual.top + frame.residual.height
   const common = { kind: 'text', size: 12.5, fill: palette.ink } as const
   return [
-    { ...common, runs: [{ text: 'T', level: 'base' }], x: 0, y: 10, align: 'left', isItalic: true },
-    { ...common, runs: [{ text: 'cp', level: 'sub' }, { text: ' / °C', level: 'base' }], x: 8, y: 10, align: 'left' },
-    { ...common, runs: [{ text: 'salt concentration [M] / mol L', level: 'base' }, { text: '−1', level: 'sup' }], x: right, y: foot + 33, align: 'right' },
-    { ...common, runs: [{ text: 'residual / K', level: 'base' }], size: 12, fill: palette.ink2, x: right, y: frame.residual.top - 4, align: 'right', halo: palette.paper },
+    { ...common, runs: [{ text: 'T' }], x: 0, y: 10, align: 'left', isItalic: true },
+    { ...common, runs: [{ text: 'cp', place: 'sub' }, { text: ' / °C' }], x: 8, y: 10, align: 'left' },
+    { ...common, runs: [{ text: 'salt concentration [M] / mol L' }, { text: '−1', place: 'sup' }], x: right, y: foot + 33, align: 'right' },
+    { ...common, runs: plainText('residual / K'), size: 12, fill: palette.ink2, x: right, y: frame.residual.top - 4, align: 'right', halo: palette.paper },
   ]
 }
 

@@ -1,3 +1,5 @@
+import type { FormulaPiece } from '#shared/science/chemistry/ions'
+
 /** The few kinds of marks a figure is made of, in pixels, before any drawing library sees them. */
 export interface PathShape {
   kind: 'path'
@@ -9,14 +11,9 @@ export interface PathShape {
   opacity?: number
 }
 
-export interface TextRun {
-  text: string
-  level: 'base' | 'sub' | 'sup'
-}
-
 export interface TextShape {
   kind: 'text'
-  runs: TextRun[]
+  runs: FormulaPiece[]
   x: number
   y: number
   align: 'left' | 'center' | 'right'
@@ -43,6 +40,6 @@ export function circle(x: number, y: number, radius: number): string {
   return `M${(x - radius).toFixed(1)} ${y.toFixed(1)}a${radius} ${radius} 0 1 0 ${2 * radius} 0a${radius} ${radius} 0 1 0 ${-2 * radius} 0Z`
 }
 
-export function plainText(text: string): TextRun[] {
-  return [{ text, level: 'base' }]
+export function plainText(text: string): FormulaPiece[] {
+  return [{ text }]
 }

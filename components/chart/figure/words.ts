@@ -1,4 +1,4 @@
-import { formulaPieces } from '~~/components/ui/formulaPieces'
+import { formulaPieces } from '#shared/science/chemistry/ions'
 import { sampleAt, type Frame } from './frame'
 import { circle, line, plainText, type Shape, type TextShape } from './shapes'
 import { overlap, textBox, textWidth } from './text'

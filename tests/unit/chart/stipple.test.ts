@@ -1,11 +1,10 @@
 import { describe, expect, it } from 'vitest'
-import { stipple, type StippleLayer } from '~~/components/chart/figure/stipple'
+import { dotsPath, stipple, type StippleLayer } from '~~/components/chart/figure/stipple'
 
 const area = { left: 0, top: 0, right: 200, bottom: 200 }
 
 function dots(layers: StippleLayer[]) {
-  return layers.flatMap(({ radius, path }) => [...path.matchAll(/M([\d.]+) ([\d.]+)/g)]
-    .map(([, x, y]) => ({ x: Number(x), y: Number(y), radius })))
+  return layers.flatMap(layer => layer.dots.map(([x, y]) => ({ x, y, radius: layer.radius })))
 }
 
 describe('stipple', () => {
@@ -39,5 +38,15 @@ describe('stipple', () => {
 
   it('has no dots where there is no curve', () => {
     expect(stipple({ area, curve: () => NaN, side: 'above' })).toEqual([])
+  })
+})
+
+describe('dotsPath', () => {
+  it('starts each row anew and goes on by the distance between neighbours', () => {
+    expect(dotsPath([[1, 2], [7.5, 2], [4.25, 7.63]])).toBe('M1.0 2.0h0.01m6.49 0h0.01M4.3 7.6h0.01')
+  })
+
+  it('is empty without dots', () => {
+    expect(dotsPath([])).toBe('')
   })
 })
