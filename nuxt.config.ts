@@ -40,6 +40,8 @@ export default defineNuxtConfig({
     },
     'nitro:init'(nitro) {
       registerRoutes(nitro)
+      // Answers are typed by their contracts; without this the client's type check would read the server's files.
+      nitro.hooks.hook('types:extend', types => void (types.routes = {}))
       nitro.hooks.hook('compiled', () => buildTools(nitro.options.output.serverDir))
     },
   },
