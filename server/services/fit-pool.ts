@@ -1,7 +1,8 @@
 import Piscina from 'piscina'
 import { ScienceError } from '#shared/science/errors'
 import type { FitRequest, FitResult } from '#shared/science/fitting/types'
-import type { FitOutcome } from '~~/server/workers/fit'
+import type { ModelComparison } from '#shared/science/fitting'
+import type { Outcome, Task } from '~~/server/workers/fit'
 import { ServiceError } from './errors'
 
 const timeLimit = 2_000
@@ -23,28 +24,30 @@ function fitPool(): Piscina {
 }
 
 /** Fits in a thread that is ended when its two seconds are over, so that no request holds up the others. */
-export async function fitInPool(request: FitRequest): Promise<FitResult> {
-  const outcome = await run(request)
-  if ('problems' in outcome) throw new ScienceError('unusable-input', outcome.problems)
-  return outcome.result
+export function fitInPool(request: FitRequest): Promise<FitResult> {
+  return run<FitResult>({ kind: 'fit', request })
 }
 
-async function run(request: FitRequest): Promise<FitOutcome> {
+/** Compares the named models in such a thread. */
+export function compareInPool(request: Omit<FitRequest, 'model' | 'parameters'>): Promise<ModelComparison> {
+  return run<ModelComparison>({ kind: 'compare', request })
+}
+
+async function run<Answer>(task: Task): Promise<Answer> {
   const clock = AbortSignal.timeout(timeLimit)
-  try {
-    return await fitPool().run(request, { signal: clock }) as FitOutcome
-  }
-  catch (error) {
-    if (clock.aborted) {
-      throw new ServiceError('invalid', 'The fit was stopped after two seconds.', {
-        faults: [{ path: 'model', message: 'took more than two seconds; simplify the expression, give starts nearer to the answer, or send fewer points' }],
-      })
-    }
-    if (error instanceof Error && /queue/i.test(error.message)) {
-      throw new ServiceError('unavailable', 'Too many fits are waiting. Try again in a few seconds.', { retryAfter: 5 })
-    }
-    throw error
-  }
+  const outcome = await fitPool().run(task, { signal: clock }).catch((error: unknown) => {
+    throw clock.aborted ? tooSlow() : isFull(error) ? new ServiceError('unavailable', 'Too many fits are waiting. Try again in a few seconds.', { retryAfter: 5 }) : error
+  }) as Outcome
+  if ('problems' in outcome) throw new ScienceError('unusable-input', outcome.problems)
+  return outcome.answer as Answer
+}
+
+const isFull = (error: unknown) => error instanceof Error && /queue/i.test(error.message)
+
+function tooSlow() {
+  return new ServiceError('invalid', 'The fit was stopped after two seconds.', {
+    faults: [{ path: 'model', message: 'took more than two seconds; choose a simpler model, give starts nearer to the answer, or send fewer points' }],
+  })
 }
 
 export async function closeFitPool(): Promise<void> {

@@ -2,8 +2,8 @@ import { createHash } from 'node:crypto'
 import { desc, eq, inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import { ScienceError } from '#shared/science/errors'
-import { compareModels, fit as fitPoints } from '#shared/science/fitting'
-import type { FitResult, ModelName, Point } from '#shared/science/fitting/types'
+import { fit as fitPoints, supportOf } from '#shared/science/fitting'
+import type { FitRequest, FitResult, ModelName, Point } from '#shared/science/fitting/types'
 import { engine } from '#shared/science/version'
 import type { Transaction } from '~~/server/database/client'
 import { fit, fitBlank, fitResult, fitRevision, series, seriesRevision, type FitOptions } from '~~/server/database/schema'
@@ -29,7 +29,8 @@ export function usualOptions(points: readonly Point[]): FitOptions {
 
 /** A binding term only where the readings ask for one, else the straight line. */
 function supportedModel(points: Point[], options: FitOptions): ModelName {
-  return compareModels({ ...options, points }).verdict === 'supported' ? 'linear-langmuir' : 'linear'
+  const [line, binding] = (['linear', 'linear-langmuir'] as const).map(model => attemptFit({ ...options, model, points }))
+  return line && binding && supportOf({ ...options, points }, line, binding).verdict === 'supported' ? 'linear-langmuir' : 'linear'
 }
 
 /**
@@ -42,9 +43,15 @@ export async function fitSeries(tx: Transaction, who: string, id: string, choice
   const points = content ? pointsOf(content) : []
   if (!content?.revision || points.length === 0) return null
   const options = choice.options ?? usualOptions(points)
+  const model = choice.model ?? supportedModel(points, options)
+  const result = attemptFit({ ...options, model, points })
+  return result ? keepFit(tx, who, id, content, { model, options, result }) : null
+}
+
+/** A fit, or nothing where the readings are too few for the model. */
+function attemptFit(request: FitRequest): FitResult | null {
   try {
-    const model = choice.model ?? supportedModel(points, options)
-    return await keepFit(tx, who, id, content, { model, options, result: fitPoints({ ...options, model, points }) })
+    return fitPoints(request)
   }
   catch (error) {
     if (error instanceof ScienceError) return null

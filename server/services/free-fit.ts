@@ -5,8 +5,10 @@ import { checkNamed, checkReadings, collect } from '#shared/science/fitting/chec
 import type { FitRequest, FitResult } from '#shared/science/fitting/types'
 import { fitInPool } from './fit-pool'
 
-/** Named models up to this many points take a few milliseconds at most and are fitted at once; the rest goes to a thread. */
+/** Up to this many points a named model takes a few milliseconds and is fitted at once; the rest goes to a thread. */
 const quickPoints = 200
+/** Searched over two shape parameters: a tenth of a second even for a dozen points. */
+const slowModel = 'linear-hill'
 
 /**
  * Fits what anybody sends, without keeping it.
@@ -14,7 +16,7 @@ const quickPoints = 200
  * @throws ScienceError with every problem of the input; ServiceError where the fit takes too long
  */
 export async function fitFreely(request: FitRequest): Promise<FitResult> {
-  const isQuick = typeof request.model === 'string' && request.points.length <= quickPoints
+  const isQuick = typeof request.model === 'string' && request.model !== slowModel && request.points.length <= quickPoints
   return isQuick ? fit(request) : fitInPool(request)
 }
 

@@ -1,10 +1,10 @@
 import { and, asc, desc, eq, gt, isNull } from 'drizzle-orm'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 import { ScienceError } from '#shared/science/errors'
-import { compareModels } from '#shared/science/fitting'
 import { asPerson, type Transaction } from '~~/server/database/client'
 import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
 import { conditionsOf } from './conditions'
+import { compareInPool } from './fit-pool'
 import { currentFits, pointsOf, usualOptions } from './fits'
 import { cursorOf, pageOf, type Page } from './pages'
 import { contentOf, type SeriesContent } from './series-content'
@@ -68,7 +68,7 @@ export function showSeries(who: string, id: string): Promise<Series> {
       revision: content.revision?.number ?? null,
       readings: content.readings,
       fit: (content.revision && fits.get(content.revision.id)) ?? null,
-      support: supportFor(content),
+      support: await supportFor(content),
       revisions: await revisionsOf(tx, id),
     }
   })
@@ -81,11 +81,11 @@ async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisio
   return rows.map(({ by, at, ...row }) => ({ ...row, by: by ?? 'a former member', at: at.toISOString() }))
 }
 
-function supportFor(content: SeriesContent): Series['support'] {
+async function supportFor(content: SeriesContent): Promise<Series['support']> {
   const points = pointsOf(content)
   if (points.length === 0) return { verdict: null, models: [] }
   try {
-    const { verdict, models } = compareModels({ ...usualOptions(points), points })
+    const { verdict, models } = await compareInPool({ ...usualOptions(points), points })
     return { verdict, models }
   }
   catch (error) {
