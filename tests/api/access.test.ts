@@ -1,0 +1,103 @@
+import { readdirSync } from 'node:fs'
+import { join } from 'node:path'
+import { fileURLToPath } from 'node:url'
+import { beforeAll, describe, expect, it } from 'vitest'
+import { clearCounters } from './support/database'
+import { demoProject, nobody, signedInAs, type Part } from './support/server'
+
+/** What each rule answers to whom, before anything is validated: 'in' is any answer but 401, 403 and 404. */
+const expected: Record<string, Record<Visitor, 'in' | 401 | 403 | 404>> = {
+  anyone: { 'signed out': 'in', 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 'in', 'admin': 'in' },
+  signedIn: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 'in', 'admin': 'in' },
+  projectMember: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
+  projectEditor: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 403, 'outsider': 404, 'admin': 404 },
+  seriesReader: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
+  jobWatcher: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
+  jobOwner: { 'signed out': 401, 'owner': 'in', 'member': 403, 'collaborator': 403, 'outsider': 404, 'admin': 404 },
+  siteAdmin: { 'signed out': 401, 'owner': 404, 'member': 404, 'collaborator': 404, 'outsider': 404, 'admin': 'in' },
+}
+
+type Visitor = 'signed out' | Part
+const visitors: Visitor[] = ['signed out', 'owner', 'member', 'collaborator', 'outsider', 'admin']
+type Agent = ReturnType<typeof nobody>
+type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'
+interface Operation { method: Method, path: string, rule: string }
+
+interface Description {
+  'paths': Record<string, Partial<Record<Method, { 'x-access': string, 'summary': string }>>>
+  'x-library-routes': string[]
+}
+
+const description = await nobody().get('/api/v1/openapi.json').then(({ body }) => body as Description)
+const operations: Operation[] = Object.entries(description.paths).flatMap(([path, methods]) =>
+  Object.entries(methods).map(([method, operation]) => ({ method: method as Method, path, rule: operation['x-access'] })))
+
+const places: Record<string, string> = {}
+const agents = new Map<Visitor, Agent>()
+
+beforeAll(async () => {
+  await clearCounters()
+  agents.set('signed out', nobody())
+  for (const visitor of visitors) if (visitor !== 'signed out') agents.set(visitor, await signedInAs(visitor))
+  const owner = agents.get('owner')!
+  places.project = await demoProject()
+  places.series = (await owner.get(`/api/v1/projects/${places.project}/series`).expect(200)).body.items[0].id
+  places.job = (await owner.post(`/api/v1/projects/${places.project}/refit`).expect(202)).body.id
+})
+
+describe('the registry', () => {
+  it('holds a declaration for every file under server/api', () => {
+    const folder = fileURLToPath(new URL('../../server/api', import.meta.url))
+    const fallback = '[...].ts'
+    const files = readdirSync(folder, { recursive: true, withFileTypes: true }).filter(entry => entry.isFile()).map(entry => join(entry.parentPath, entry.name).slice(folder.length))
+    const undeclared = files.filter(file => file !== `/${fallback}`).filter((file) => {
+      const [, stem, method] = /^(.*)\.(\w+)\.ts$/.exec(file) ?? []
+      const path = `/api${stem?.replace(/\/index$/, '').replace(/\[(\w+)\]/g, '{$1}')}`
+      return !operations.some(one => one.path === path && one.method === method)
+    })
+    expect(undeclared).toEqual([])
+  })
+
+  it('names every route that libraries bring', () => {
+    expect(description['x-library-routes']).toEqual(['delete /api/_auth/session', 'get /api/_auth/session'])
+  })
+
+  it('knows the outcome of every rule in use', () => {
+    expect(operations.map(one => one.rule).filter(rule => !(rule in expected))).toEqual([])
+  })
+})
+
+describe.each(operations)('$method $path ($rule)', ({ method, path, rule }) => {
+  it.each(visitors)('answers as its rule says to: %s', async (visitor) => {
+    // Signing in and out would end the sessions this test stands on.
+    const agent = path.startsWith('/api/auth/') ? nobody() : agents.get(visitor)!
+    const address = path.replace(/\{(\w+)\}/g, (_, name: string) => places[name] ?? '')
+    const status = await statusOf(agent, method, address)
+    const outcome = expected[rule]![visitor]
+    if (outcome === 'in') expect([401, 403, 404]).not.toContain(status)
+    else expect(status).toBe(outcome)
+  })
+})
+
+// An empty body is invalid everywhere, so nothing is made; a stream is left as soon as it has begun.
+async function statusOf(agent: Agent, method: Method, address: string): Promise<number> {
+  const call = agent[method](address)
+  if (method !== 'get') call.send({})
+  if (!address.endsWith('/events')) return (await call).status
+  return new Promise((resolve, reject) => {
+    call.buffer(false).parse((response, done) => {
+      resolve((response as unknown as { statusCode: number }).statusCode)
+      done(null, null)
+      call.abort()
+    }).then(({ status }) => resolve(status), error => resolve(error.status ?? reject(error)))
+  })
+}
+
+describe('what is not there', () => {
+  it.each(['project', 'series', 'job'])('is 404 for a made-up %s and for an id that is none', async (kind) => {
+    const owner = agents.get('owner')!
+    const base = { project: '/api/v1/projects/', series: '/api/v1/series/', job: '/api/v1/jobs/' }[kind]!
+    await owner.get(`${base}0197a000-0000-7000-8000-000000000000`).expect(404)
+    await owner.get(`${base}not-an-id`).expect(404)
+  })
+})

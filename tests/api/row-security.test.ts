@@ -1,0 +1,105 @@
+import { beforeAll, describe, expect, it } from 'vitest'
+import { v7 } from 'uuid'
+import { asApp, asOwner, personId, refusalOf, tablesOf } from './support/database'
+import { people } from './support/server'
+
+const insufficientPrivilege = '42501'
+
+async function visibleRows(person: string | null): Promise<Record<string, number>> {
+  return asApp(person, async (client) => {
+    const seen: Record<string, number> = {}
+    for (const table of await tablesOf(client)) {
+      if (await refusalOf(client, `select 1 from "${table}" limit 1`) !== null) continue
+      const { rows } = await client.query<{ count: string }>(`select count(*) from "${table}"`)
+      if (rows[0]!.count !== '0') seen[table] = Number(rows[0]!.count)
+    }
+    return seen
+  })
+}
+
+describe('the role that serves', () => {
+  it('owns nothing and passes no policy', async () => {
+    const { rows } = await asOwner(client => client.query(`select rolsuper, rolbypassrls,
+      (select count(*) from pg_class c where c.relowner = r.oid)::int as owned from pg_roles r where rolname = 'anionary_app'`))
+    expect(rows).toEqual([{ rolsuper: false, rolbypassrls: false, owned: 0 }])
+  })
+
+  it('may empty no table', async () => {
+    const { rows } = await asOwner(client => client.query(`select table_name from information_schema.role_table_grants
+      where grantee = 'anionary_app' and privilege_type = 'TRUNCATE'`))
+    expect(rows).toEqual([])
+  })
+
+  it('finds row-level security on every table', async () => {
+    const { rows } = await asOwner(client => client.query(`select relname from pg_class
+      where relnamespace = 'public'::regnamespace and relkind in ('r', 'p') and not relrowsecurity`))
+    expect(rows).toEqual([])
+  })
+})
+
+describe('what is seen', () => {
+  it('is nothing with nobody set', async () => {
+    expect(await visibleRows(null)).toEqual({})
+  })
+
+  it('is nothing for a person who does not exist', async () => {
+    expect(await visibleRows(v7())).toEqual({})
+  })
+
+  it('is only themselves for a person without lab and project', async () => {
+    const seen = await visibleRows(await personId(people.outsider))
+    expect(Object.keys(seen).filter(table => !['audit_event', 'person', 'person_site_role', 'project', 'project_member'].includes(table))).toEqual([])
+    expect(seen.person).toBe(1)
+  })
+
+  it('is the project for its members', async () => {
+    const seen = await visibleRows(await personId(people.collaborator))
+    expect(Object.keys(seen)).toEqual(expect.arrayContaining(['project', 'campaign', 'series', 'series_revision', 'reading']))
+  })
+
+  it('is never a password', async () => {
+    for (const person of [people.owner, people.admin]) expect(await visibleRows(await personId(person))).not.toHaveProperty('credential')
+  })
+})
+
+describe('what is written', () => {
+  let project: string
+  let campaign: string
+  beforeAll(async () => {
+    const { rows } = await asOwner(client => client.query('select c.id, c.project_id from campaign c join project p on p.id = c.project_id where p.name = \'Shadehouse gel\' limit 1'))
+    campaign = rows[0].id
+    project = rows[0].project_id
+  })
+
+  const newSeries = 'insert into series (id, project_id, campaign_id, salt_formula, salt_name, anion, cation) values ($1, $2, $3, \'NaCl\', \'sodium chloride\', \'Cl^-\', \'Na^+\')'
+  const writes = async (email: string | null) => asApp(email && await personId(email), client =>
+    refusalOf(client, newSeries, [v7(), project, campaign]))
+
+  it('is let through for an editor', async () => {
+    expect(await writes(people.member)).toBeNull()
+  })
+
+  it.each([['a collaborator', people.collaborator], ['an outsider', people.outsider], ['an administrator', people.admin], ['nobody', null]])('is refused for %s', async (_, email) => {
+    expect(await writes(email)).toBe(insufficientPrivilege)
+  })
+
+  it('carries the name of whoever asks and of nobody else', async () => {
+    const other = await personId(people.owner)
+    const code = await asApp(await personId(people.member), async (client) => {
+      const { rows } = await client.query('select id from series limit 1')
+      return refusalOf(client, 'insert into series_revision (id, project_id, series_id, number, summary, made_by) values ($1, $2, $3, 999, \'forged\', $4)', [v7(), project, rows[0].id, other])
+    })
+    expect(code).toBe(insufficientPrivilege)
+  })
+
+  it('cannot hang a reading of one project into another', async () => {
+    const foreignKeyViolation = '23503'
+    const member = await personId(people.member)
+    const code = await asApp(member, async (client) => {
+      const own = v7()
+      await client.query('insert into project (id, name, created_by) values ($1, \'mine\', $2)', [own, member])
+      return refusalOf(client, newSeries, [v7(), own, campaign])
+    })
+    expect(code).toBe(foreignKeyViolation)
+  })
+})
