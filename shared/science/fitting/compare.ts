@@ -1,7 +1,7 @@
 /** Do the readings speak for a binding term? */
 import { BindingProfile } from './profile'
 import { nestedTest } from './criteria'
-import { fit } from './fit'
+import { fitWithoutNotes } from './named'
 import { scaleData } from './scale'
 import { modelNames, type FitRequest, type FitResult, type ModelName } from './types'
 import { weightsOf } from './weights'
@@ -53,7 +53,7 @@ export function compareModels(request: Omit<FitRequest, 'model' | 'parameters'>)
 /** A fit, or nothing where the readings are too few for the model. */
 function attempt(request: FitRequest): FitResult[] {
   try {
-    return [fit(request)]
+    return [fitWithoutNotes(request)]
   }
   catch (error) {
     const isTooFew = error instanceof ScienceError && error.problems.every(({ path }) => path === 'points')

@@ -6,7 +6,10 @@ import type { Model } from '../models'
 import { seededRandom } from '../random'
 import { checkCounts, checkOptions, checkReadings, collect } from './check'
 import { descend, type Bounds, type Descent } from './descend'
-import { analyse, toResult, type Analysis } from './result'
+import { descendInLogarithms } from './logarithmic'
+import type { Objective } from './objective'
+import { withNotes } from './fit'
+import { analyse, type Analysis } from './result'
 import type { Solution } from './solve'
 import type { ExpressionModel, FitRequest, FitResult, ParameterOptions, Point } from './types'
 import { weightsOf } from './weights'
@@ -92,7 +95,7 @@ function fitCompiled(compiled: Compiled, request: FitRequest, parameters: Option
   const isExhausted = budget.left < 0
   budget.left = operationBudget
   const analysis: Analysis = analyse(request, weights, isExhausted ? { ...solution, stopReason: 'limit' } : solution)
-  const result = toResult(analysis)
+  const result = withNotes(analysis)
   return budget.left < 0 ? withoutIntervals(result) : result
 }
 
@@ -112,7 +115,7 @@ function solveExpression(compiled: Compiled, data: ExpressionData, options: Opti
   refuseUndefinedStart(objective.residuals, given, data)
   let best: Descent | null = null
   for (const start of [given, ...startsInside(given, bounds)]) {
-    const found = descend(objective, start, bounds, iterationLimit)
+    const found = descendPatiently(objective, start, bounds)
     if (Number.isFinite(found.sum) && (!best || found.sum < best.sum * (1 - 1e-12))) best = found
     if (budget.left < 0) break
   }
@@ -125,6 +128,16 @@ function solveExpression(compiled: Compiled, data: ExpressionData, options: Opti
     estimated: model, values, objective, sum: chosen.sum, end: null, stopReason: chosen.stopReason,
     columns: chosen.inside.map(at => free[at]!), stationary: chosen.stationary,
   }
+}
+
+/** A descent that only reached its limit tries once more by way of the logarithms. */
+function descendPatiently(objective: Objective, start: Float64Array, bounds: Bounds): Descent {
+  const found = descend(objective, start, bounds, iterationLimit)
+  if (found.stopReason !== 'limit') return found
+  const further = descendInLogarithms(objective, start, iterationLimit)
+  if (!further) return found
+  const again = descend(objective, further, bounds, iterationLimit)
+  return again.sum < found.sum ? again : found
 }
 
 function refuseUndefinedStart(residuals: (point: Float64Array, out: Float64Array) => void, start: Float64Array, data: ExpressionData): void {
