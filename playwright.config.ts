@@ -1,4 +1,5 @@
 import { defineConfig } from '@playwright/test'
+import { quietChromium } from './scripts/lib/browser.mjs'
 
 // Started by `npm test -- browser`, which boots a fresh stack first and says where it listens.
 export default defineConfig({
@@ -16,7 +17,7 @@ export default defineConfig({
     screenshot: 'only-on-failure',
     launchOptions: {
       executablePath: process.env.ANIONARY_CHROMIUM ?? '/usr/bin/chromium',
-      args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
+      args: quietChromium,
     },
   },
 })

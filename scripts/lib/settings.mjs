@@ -39,6 +39,8 @@ export function appSettings(data, { host, port }) {
   const url = process.env.ANIONARY_URL || `http://${host}:${port}`
   return {
     NODE_ENV: 'production',
+    // The storage client announces when it will stop supporting this Node.js, at every start.
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
     HOST: host,
     PORT: String(port),
     ANIONARY_URL: url,

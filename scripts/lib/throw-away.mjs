@@ -27,7 +27,7 @@ export async function startThrowAway(session) {
   for (const name of REAL_SERVICES) delete process.env[name]
   const data = throwAwayFolder(session)
   const { url, env } = await startStack(session, data, { host: '127.0.0.1', port: await freePort() })
-  return { url, env: { ...env, NODE_ENV: 'test', AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true', ANIONARY_DATA: data, ANIONARY_TEST_URL: url } }
+  return { url, env: { ...env, NODE_ENV: 'test', ANIONARY_DATA: data, ANIONARY_TEST_URL: url } }
 }
 
 /** @param {string} data */
