@@ -1,19 +1,21 @@
-import { checkSheet, columns, emptyRow, type Column, type SheetRow } from '~~/components/landing/sheet/check'
-import { exampleRows, examples, type Example } from '~~/components/landing/sheet/examples'
-import { readTable } from '~~/components/landing/sheet/table'
+import { checkSheet, columns, emptyRow, type Column, type SheetRow } from '~~/composables/sheet/check'
+import { exampleRows, examples, type Example } from '~~/composables/sheet/examples'
+import { readTable } from '~~/composables/sheet/table'
 
 /** All that a person has put into the sheet; kept for the tab's life, so that a reload loses nothing. */
 interface SheetState {
   rows: SheetRow[]
   hasUncertainty: boolean
   example: Example['name'] | null
+  /** what the curve is labelled with; unknown once a table of one's own is pasted */
+  ion: string | null
 }
 
 const storageKey = 'anionary-sheet'
 const mostUndone = 20
 
 function stateOf(example: Example): SheetState {
-  return { rows: exampleRows(example), hasUncertainty: false, example: example.name }
+  return { rows: exampleRows(example), hasUncertainty: false, example: example.name, ion: example.ion }
 }
 
 /** There is always one empty row at the foot to type into. */
@@ -79,7 +81,7 @@ export function useSheet() {
       next.push(target)
     })
     next.push(...below.slice(table.rows.length))
-    change({ rows: trimmed(next), hasUncertainty: state.value.hasUncertainty || from + width > 2, example: null })
+    change({ rows: trimmed(next), hasUncertainty: state.value.hasUncertainty || from + width > 2, example: null, ion: null })
     remark.value = table.headLines > 0 || table.isMillimolar ? table : null
   }
 
@@ -95,7 +97,7 @@ export function useSheet() {
 
   function clear() {
     remark.value = null
-    change({ ...state.value, rows: [], example: null })
+    change({ ...state.value, rows: [], example: null, ion: null })
   }
 
   function undo() {
@@ -128,6 +130,7 @@ export function useSheet() {
     rows, checked,
     hasUncertainty: computed(() => state.value.hasUncertainty),
     example: computed(() => state.value.example),
+    ion: computed(() => state.value.ion),
     canUndo: computed(() => undone.value.length > 0),
     remark: readonly(remark),
     setCell, paste, load, clear, undo, divideByThousand, setUncertainty,

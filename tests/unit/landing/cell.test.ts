@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { readCell } from '~~/components/landing/sheet/cell'
+import { readCell } from '~~/composables/sheet/cell'
 
 describe('readCell', () => {
   it.each([

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { checkSheet, emptyRow, type SheetRow } from '~~/components/landing/sheet/check'
+import { checkSheet, emptyRow, type SheetRow } from '~~/composables/sheet/check'
 
 function rows(...cells: [string, string, string?][]): SheetRow[] {
   return cells.map(([x, y, sd = '']) => ({ ...emptyRow(), x, y, sd }))

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { readTable } from '~~/components/landing/sheet/table'
+import { readTable } from '~~/composables/sheet/table'
 
 describe('readTable', () => {
   it.each([
