@@ -2,8 +2,9 @@ import type { FitNote } from '../types'
 import { convergence } from './convergence'
 import { concentrations, extrapolation, ladder, weighting } from './design'
 import { identification, support } from './identification'
+import { influence } from './influence'
 import { inOrder, type Diagnosis, type Subject } from './note'
-import { influence, residualChecks } from './residuals'
+import { residualChecks } from './residuals'
 
 const diagnoses: readonly Diagnosis[] = [
   convergence, identification, support, ladder, extrapolation, weighting, residualChecks, influence, concentrations,

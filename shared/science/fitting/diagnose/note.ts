@@ -9,6 +9,11 @@ export interface Subject {
 
 export type Diagnosis = (subject: Subject) => FitNote[]
 
+/** Residuals at the level of rounding carry no message. */
+export function isExact({ solution }: Analysis): boolean {
+  return solution.sum < 1e-24 * solution.problem.data.n
+}
+
 export function note(code: NoteCode, severity: Severity, values: FitNote['values'] = {}): FitNote {
   return { code, severity, values }
 }

@@ -12,18 +12,15 @@ export const thresholds = {
   /** Degrees of freedom below which points are few. */
   degreesOfFreedom: 3,
   /** Probability of the residual checks. */
-  residualProbability: 0.005,
+  residualProbability: 0.01,
   /** Fewest values for a test of normality. */
   normalityValues: 8,
   /** Fewest degrees of freedom of replicates for a test against them. */
   replicateFreedom: 2,
   /** Sum of the weights squared over the sum of their squares, per reading: below it few readings carry the fit. */
   effectiveShare: 1 / 3,
+  /** Probability, by simulation on the same design, of a removal that moves a constant as far. */
+  influenceProbability: 0.01,
   /** Relative error of a concentration whose effect is compared with the scatter. */
   concentrationError: 0.01,
 } as const
-
-/** 99th percentile, over clean series, of the largest shift of a constant by leaving one reading out, in standard errors. */
-export function largestUsualShift(n: number, parameters: number): number {
-  return 1.2 + 0.35 * parameters + 18 / n
-}
