@@ -27,6 +27,9 @@ export function usualOptions(points: readonly Point[]): FitOptions {
   return points.every(point => point.n !== undefined) ? { weighting: 'replicates' } : {}
 }
 
+/** Three places on the axis cannot tell a line from a curve: nobody would quote a constant from them. */
+const fewestPlaces = 4
+
 /** A binding term only where the readings ask for one, else the straight line. */
 function supportedModel(points: Point[], options: FitOptions): ModelName {
   const [line, binding] = (['linear', 'linear-langmuir'] as const).map(model => attemptFit({ ...options, model, points }))
@@ -41,7 +44,7 @@ function supportedModel(points: Point[], options: FitOptions): ModelName {
 export async function fitSeries(tx: Transaction, who: string, id: string, choice: FitChoice = {}): Promise<string | null> {
   const content = (await contentOf(tx, [id])).get(id)
   const points = content ? pointsOf(content) : []
-  if (!content?.revision || points.length === 0) return null
+  if (!content?.revision || new Set(points.map(({ x }) => x)).size < fewestPlaces) return null
   const options = choice.options ?? usualOptions(points)
   const model = choice.model ?? supportedModel(points, options)
   const result = attemptFit({ ...options, model, points })

@@ -2,11 +2,6 @@ import { clearUserSession, getUserSession, replaceUserSession, useRuntimeConfig 
 import { getCookie, type H3Event } from 'h3'
 import { sessionPerson, type Visitor } from '~~/server/services/sessions'
 
-declare module '#auth-utils' {
-  interface User { id: string, name: string }
-  interface SecureSessionData { session: string }
-}
-
 /** Who asks: the person of the cookie's session as the database knows it now, or nobody. */
 export async function visitorOf(event: H3Event): Promise<Visitor | null> {
   const session = await namedSession(event)

@@ -5,9 +5,10 @@ import { Client } from 'pg'
 import * as schema from '../schema'
 import { accounts } from './accounts'
 import { demo } from './demo'
+import { demoFits } from './demo-fits'
 import type { Seed } from './seeding'
 
-const seeds: Seed[] = [accounts, demo]
+const seeds: Seed[] = [accounts, demo, demoFits]
 const seedLock = 7_220_452
 
 const connectionString = process.env.DATABASE_OWNER_URL
