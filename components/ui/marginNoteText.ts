@@ -12,4 +12,6 @@ export interface MarginNoteText {
   heading: string
   sentences: string[]
   tag?: NoteTag
+  /** words in place of the tag's own, where they can say more */
+  tagLabel?: string
 }

@@ -42,3 +42,9 @@ export function niceSpan([low, high]: Span, most: number): Span {
   const step = niceStep(high - low, most)
   return [Math.floor(low / step + 1e-9) * step, Math.ceil(high / step - 1e-9) * step]
 }
+
+/** Numbers of an axis, all to the same decimals; zero stays bare. */
+export function tickLabels(values: readonly number[]): string[] {
+  const decimals = Math.max(0, ...values.map(value => String(value).split('.')[1]?.length ?? 0))
+  return values.map(value => value === 0 ? '0' : value.toFixed(decimals).replace('-', '−'))
+}

@@ -42,11 +42,18 @@ export function findingsOf(series: readonly ComparedSeries[]): Finding[] {
   return [...scaleFindings(series), ...offsetFindings(series), ...emptyFindings(series)]
 }
 
-/** The series that need a look before anyone quotes them, and why. */
-export function attentionOf(series: readonly ComparedSeries[], findings: readonly Finding[]): Map<string, 'concentration-scale' | 'no-blank'> {
-  const scaled = findings.flatMap(finding => finding.code === 'concentration-scale' ? finding.series : [])
-  const blankless = series.filter(one => one.measured > 0 && !one.hasBlank).map(one => one.id)
-  return new Map([...blankless.map(id => [id, 'no-blank'] as const), ...scaled.map(id => [id, 'concentration-scale'] as const)])
+/** Why a series needs a look. */
+export type Attention = 'concentration-low' | 'concentration-high' | 'no-blank'
+
+/** The series that need a look before anyone quotes them. */
+export function attentionOf(series: readonly ComparedSeries[], findings: readonly Finding[]): Map<string, Attention> {
+  const attention = new Map<string, Attention>()
+  for (const one of series) if (one.measured > 0 && !one.hasBlank) attention.set(one.id, 'no-blank')
+  for (const finding of findings) {
+    if (finding.code !== 'concentration-scale') continue
+    for (const id of finding.series) attention.set(id, finding.scale < 1 ? 'concentration-low' : 'concentration-high')
+  }
+  return attention
 }
 
 function meanShift(series: readonly ComparedSeries[]): ShiftCurve {

@@ -1,0 +1,42 @@
+import type { Project, ProjectDetail } from '#shared/contracts/projects'
+import type { Series, SeriesSummary } from '#shared/contracts/series'
+
+interface PageOf<Item> { items: Item[], nextCursor: string | null }
+
+const largestPage = 200
+
+/** Follows a paged list to its end. */
+async function everyPage<Item>(fetchPage: (query: { limit: number, cursor?: string }) => Promise<PageOf<Item>>): Promise<Item[]> {
+  const items: Item[] = []
+  let cursor: string | null | undefined
+  do {
+    const page: PageOf<Item> = await fetchPage({ limit: largestPage, ...(cursor && { cursor }) })
+    items.push(...page.items)
+    cursor = page.nextCursor
+  } while (cursor)
+  return items
+}
+
+/** The projects of whoever is signed in. */
+export function useProjects() {
+  const request = useRequestFetch()
+  return useAsyncData('projects', () => everyPage(query => request<PageOf<Project>>('/api/v1/projects', { query })), { default: () => [] })
+}
+
+/** One project with its labs, campaigns and members. */
+export function useProject(project: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`project ${project}`, () => request<ProjectDetail>(`/api/v1/projects/${project}`))
+}
+
+/** Every series of a project with its readings and current fit. */
+export function useProjectSeries(project: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`series of ${project}`, () => everyPage(query => request<PageOf<SeriesSummary>>(`/api/v1/projects/${project}/series`, { query })))
+}
+
+/** One series with all it holds. */
+export function useSeries(series: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`series ${series}`, () => request<Series>(`/api/v1/series/${series}`))
+}
