@@ -11,6 +11,7 @@ export const units = {
   h: '1',
   Kd: 'M',
   BmaxK: 'K M⁻¹',
+  BmaxOverK: 'K M',
   initialSlope: 'K M⁻¹',
   curvature: 'K M⁻²',
   plateau: '°C',

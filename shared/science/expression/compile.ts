@@ -116,7 +116,7 @@ class Reader {
   }
 
   private readCall(part: CallPart, depth: number): number {
-    const name = part.fn.type === 'SymbolNode' ? part.fn.name : '(…)'
+    const name = part.fn.type === 'SymbolNode' ? part.fn.name : 'a property'
     const operation = functions.get(name)
     if (!operation) return this.reject(`calls ${name}, which is not one of ${[...functions.keys()].join(', ')}`)
     const expected = operation === 'power' ? 2 : 1

@@ -23,8 +23,9 @@ export function expressionObjective(compiled: Compiled, { predictors, y, root }:
   const room = tape.workspace()
   const firstParameter = predictors.length
   const all = held.slice()
-  const valueCost = n * (value + 1)
-  const slopeCost = n * (tape.length + free.length ** 2)
+  // The linear algebra that follows each evaluation is counted with it.
+  const valueCost = n * (value + 10)
+  const slopeCost = n * (tape.length + 2 * free.length ** 2 + 10)
 
   function run(point: ArrayLike<number>, start: number, upTo: number): number {
     const count = Math.min(blockSize, n - start)

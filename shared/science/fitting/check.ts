@@ -75,8 +75,8 @@ export function checkNamed(request: FitRequest, report: Report): void {
   if (typeof request.model !== 'string' || !modelNames.includes(request.model)) {
     return report('model', `must be one of ${modelNames.join(', ')}, or an expression`)
   }
-  request.points.forEach(({ x } = {} as Point, i) => {
-    if (isUsable(x) && x < 0) report(`points.${i}.x`, `the concentration ${x} is negative; a concentration is 0 or more`)
+  request.points.forEach((point: Point | null, i) => {
+    if (isUsable(point?.x) && point.x < 0) report(`points.${i}.x`, `the concentration ${point.x} is negative; a concentration is 0 or more`)
   })
   const known = models[request.model].parameters
   for (const [name, options] of Object.entries(request.parameters ?? {})) {

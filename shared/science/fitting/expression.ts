@@ -14,9 +14,11 @@ import type { Solution } from './solve'
 import type { ExpressionModel, FitRequest, FitResult, ParameterOptions, Point } from './types'
 import { weightsOf } from './weights'
 
-/** Elementary operations for the search and again for the intervals: a second or so each, whatever the input. */
-const operationBudget = 2e8
+/** Elementary operations for the search, and again for the intervals: well under a second each on a quiet machine. */
+const operationBudget = 8e7
 const iterationLimit = 3_000
+/** Starts that nobody chose get less patience. */
+const trialIterationLimit = 300
 const startsWithinBounds = 20
 const startSeed = 20_260_101
 
@@ -115,7 +117,7 @@ function solveExpression(compiled: Compiled, data: ExpressionData, options: Opti
   refuseUndefinedStart(objective.residuals, given, data)
   let best: Descent | null = null
   for (const start of [given, ...startsInside(given, bounds)]) {
-    const found = descendPatiently(objective, start, bounds)
+    const found = start === given ? descendPatiently(objective, start, bounds) : descend(objective, start, bounds, trialIterationLimit)
     if (Number.isFinite(found.sum) && (!best || found.sum < best.sum * (1 - 1e-12))) best = found
     if (budget.left < 0) break
   }

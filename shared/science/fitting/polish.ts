@@ -43,7 +43,8 @@ export function examine(objective: Objective, point: Float64Array, step: Float64
     relativeStep = 0
     for (let j = 0; j < p; j++) relativeStep = Math.max(relativeStep, Math.abs(step[j]!) / (Math.abs(point[j]!) || 1))
   }
-  const relativeOffset = n > p && normal > 0 ? Math.sqrt(tangential / p / (normal / (n - p))) : tangential > 0 ? Infinity : 0
+  // Without a residual left over there is nothing to be orthogonal to: the size of the step decides.
+  const relativeOffset = n > p && normal > 0 ? Math.sqrt(tangential / p / (normal / (n - p))) : Infinity
   return { point, sum: sumOfSquares(residuals), residuals, jacobian, triangle, isSingular, relativeOffset, relativeStep }
 }
 

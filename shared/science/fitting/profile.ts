@@ -114,11 +114,15 @@ export class BindingProfile {
     this.derivative = -2 * a * dot
   }
 
-  /** The sum of squares in a limit: a quadratic (or a line, without c) for K → 0, a step behind the blanks for K → ∞. */
+  /**
+   * The sum of squares in a limit. K → 0: a quadratic, or a line without c. K → ∞: a step behind the blanks, or, where
+   * there are none and the level is free, a term in 1/x.
+   */
   limit(end: 'zero' | 'infinity'): number {
     const { n, column, data: { x, root } } = this
+    const hasStep = !this.hasLevel || x.includes(0)
     for (let i = 0; i < n; i++) {
-      const value = end === 'infinity' ? Number(x[i]! > 0) : this.hasSlope ? x[i]! * x[i]! : x[i]!
+      const value = end === 'infinity' ? (hasStep ? Number(x[i]! > 0) : 1 / x[i]!) : this.hasSlope ? x[i]! * x[i]! : x[i]!
       column[i] = value * root[i]!
     }
     this.slopeOfColumn.fill(0)

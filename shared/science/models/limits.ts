@@ -9,6 +9,7 @@ import { linearQuadratic } from './linear-quadratic'
 
 const initialSlope: ParameterDefinition = { name: 'initialSlope', unit: units.initialSlope, yPower: 1, xPower: -1 }
 const curvature: ParameterDefinition = { name: 'curvature', unit: units.curvature, yPower: 1, xPower: -2 }
+const approach: ParameterDefinition = { name: 'BmaxOverK', unit: units.BmaxOverK, yPower: 1, xPower: 1 }
 const plateau: ParameterDefinition = { name: 'plateau', unit: units.plateau, yPower: 1, xPower: 0, isLevel: true }
 
 /** K → 0 with a free slope: T0, c + Bmax·K and −Bmax·K². */
@@ -30,5 +31,15 @@ export const strongBinding: Model = {
   derived: () => [],
 }
 
-/** K → ∞ without blanks: T0 + Bmax and c. */
-export const strongBindingPlateau: Model = { ...linear, parameters: [plateau, slope] }
+/** K → ∞ without blanks: T0 + Bmax, c and Bmax/K, with which the curve falls off the plateau as 1/x. */
+export const strongBindingPlateau: Model = {
+  name: 'linear-langmuir',
+  parameters: [plateau, slope, approach],
+  value: (p, x) => p[0]! + p[1]! * x - p[2]! / x,
+  gradient(_, x, out, at, stride) {
+    out[at] = 1
+    out[at + stride] = x
+    out[at + 2 * stride] = -1 / x
+  },
+  derived: () => [],
+}

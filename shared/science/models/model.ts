@@ -7,7 +7,7 @@ export interface ParameterDefinition {
   unit: string
   /** Power of the y scale and of the x scale in the parameter's dimension. */
   yPower: 0 | 1
-  xPower: 0 | -1 | -2
+  xPower: 1 | 0 | -1 | -2
   /** Moves with the origin of y. */
   isLevel?: true
   /** The model is not linear in it. */

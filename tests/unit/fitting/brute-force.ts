@@ -17,7 +17,7 @@ export function bruteForce(points: readonly Point[]): { sum: number, limit: numb
     // x²/(1 + Kx) and 1/(1 + Kx) span the same space as the binding term beside 1 and x.
     return remainder([ones, xs, xs.map(x => (isWeak ? x * x : 1) / (1 + k * x))], ys)
   }
-  const limit = Math.min(remainder([ones, xs, xs.map(x => x * x)], ys), remainder([ones, xs, xs.map(x => Number(x > 0))], ys))
+  const limit = Math.min(remainder([ones, xs, xs.map(x => x * x)], ys), remainder([ones, xs, xs.map(x => xs.includes(0) ? Number(x > 0) : 1 / x)], ys))
   const low = Math.log(1e-3 / xMax)
   const step = (Math.log(1e3 / xMin) - low) / 1_200
   const grid = Array.from({ length: 1_201 }, (_, i) => at(low + i * step))
