@@ -23,7 +23,7 @@ const arrows: Record<string, readonly string[]> = {
 }
 
 /** Packages by which the science would reach out of pure numbers. */
-const sciencePackages = ['mathjs', 'ml-levenberg-marquardt', 'ml-matrix']
+const sciencePackages = ['mathjs', 'mathjs/number', 'ml-levenberg-marquardt', 'ml-matrix']
 
 /** A long name wins over a short one that begins it. */
 const rooms = Object.keys(arrows).sort((a, b) => b.length - a.length)
