@@ -117,5 +117,5 @@ export function useFit(points: () => readonly Point[], initial: TableFits | null
     window.removeEventListener('online', retry)
   })
 
-  return { fits: readonly(fits), state: readonly(state), retry }
+  return { fits: shallowReadonly(fits), state: shallowReadonly(state), retry }
 }

@@ -65,17 +65,19 @@ function besideLeader(text: string, x: number, y: number, width: number) {
   return x + 19 <= right ? { x: x + 19, y, isBeside: true } : { x: Math.max(0, Math.min(x - 20, right)), y: y - 9, isBeside: false }
 }
 
-/** Where a word of the two phases may stand, best first, as parts of the plot's width and of the way to its edge. */
-const phasePlaces = [0.7, 0.82, 0.55, 0.3, 0.9] as const
+/** Where a word of the two phases may stand, best first: parts of the plot's width, and pixels from the curve. */
+const phasePlaces = {
+  cloudy: { parts: [0.7, 0.82, 0.55, 0.3, 0.9], aways: [52, 34] },
+  clear: { parts: [0.32, 0.5, 0.2, 0.7], aways: [90, 120, 60, 36] },
+} as const
 
 function phaseWord(word: 'cloudy' | 'clear', frame: Frame, curve: CurveHeight, isAbove: boolean, taken: readonly Box[], palette: Palette): PlacedWords {
   const { main } = frame
-  const places = word === 'cloudy' ? phasePlaces : [0.32, 0.5, 0.2, 0.7] as const
-  for (const part of places) {
+  const { parts, aways } = phasePlaces[word]
+  for (const [part, wanted] of parts.flatMap(part => aways.map(away => [part, away] as const))) {
     const x = main.left + part * main.width
     const edge = isAbove ? main.top : main.top + main.height
-    const room = Math.abs(curve(x) - edge)
-    const away = Math.min(word === 'cloudy' ? 52 : 90, room - 12)
+    const away = Math.min(wanted, Math.abs(curve(x) - edge) - 12)
     const y = curve(x) + (isAbove ? -away : away)
     const box = textBox(word, x, y, phaseSize, 'center')
     if (away < 26 || taken.some(other => overlap(box, other))) continue
@@ -98,12 +100,18 @@ function gapMarks(content: FigureContent, frame: Frame, palette: Palette): Place
   return { shapes: marks.flatMap(mark => mark.shapes), boxes: marks.map(mark => mark.box) }
 }
 
+/** The no-salt line crosses the plot; words keep off it, dots do not. */
+function noSaltBox({ curve, isSketch }: FigureContent, { main, y }: Frame): Box[] {
+  const start = curve?.x[0] === 0 && !isSketch ? curve.y[0] : undefined
+  return start === undefined ? [] : [{ left: main.left, right: main.left + main.width, top: y(start) - 2, bottom: y(start) + 2 }]
+}
+
 /** All words of the main plot, placed so that none covers another. */
 export function placeWords(content: FigureContent, frame: Frame, palette: Palette): PlacedWords {
   const fixed = [endLabel, turningPointLabel, gapMarks].map(place => place(content, frame, palette))
   const curve = curveHeight(content, frame)
-  const taken = fixed.flatMap(words => words.boxes)
-  if (!curve) return { shapes: fixed.flatMap(words => words.shapes), boxes: taken }
+  const taken = [...fixed.flatMap(words => words.boxes), ...noSaltBox(content, frame)]
+  if (!curve) return { shapes: fixed.flatMap(words => words.shapes), boxes: fixed.flatMap(words => words.boxes) }
   const isCloudyAbove = content.clouds === 'on-heating'
   const cloudy = phaseWord('cloudy', frame, curve, isCloudyAbove, taken, palette)
   const clear = phaseWord('clear', frame, curve, !isCloudyAbove, taken, palette)
