@@ -33,9 +33,19 @@ export function conditionalIntervals(solution: Solution, delta: number): Map<num
   const threshold = solution.sum + delta
   const region = regionOf(solution, profile, threshold)
   const ends = new Map<number, Ends>()
-  ends.set(k, { lower: region.isLowOpen ? null : Math.exp(region.low), upper: region.isHighOpen ? null : Math.exp(region.high) })
+  ends.set(k, endsOf(region))
   for (const [index, found] of linearEnds(problem, region, threshold)) ends.set(index, found)
   return ends
+}
+
+/** The profile interval of K alone, on scaled axes. */
+export function bindingInterval(solution: Solution, delta: number): Ends {
+  const region = regionOf(solution, profileOf(solution.problem), solution.sum + delta)
+  return endsOf(region)
+}
+
+function endsOf(region: Region): Ends {
+  return { lower: region.isLowOpen ? null : Math.exp(region.low), upper: region.isHighOpen ? null : Math.exp(region.high) }
 }
 
 /** The values of ln K around the optimum (or from the limit on) that S stays below the threshold for. */

@@ -19,7 +19,7 @@ export interface Stationary {
 /** Offset below which a fit counts as converged. @source Bates & Watts, Technometrics 23 (1981) 179 */
 export const convergedOffset = 1e-8
 /** Offset below which another step could not change the printed digits. */
-const settledOffset = 1e-13
+const settledOffset = 1e-12
 const settledStep = 1e-13
 const dependentColumns = 1e-14
 

@@ -38,29 +38,34 @@ export class BindingProfile {
   /** Of the latest `at`: the sum of squares and its exact derivative by ln K. */
   sum = 0
   derivative = 0
-  /** Coefficient of the latest basis column, and which basis it belongs to. */
-  coefficient = 0
-  isLowBasis = false
 
   private readonly n: number
   private readonly constant: Float64Array[] = []
   private readonly target: Float64Array
   private readonly column: Float64Array
-  private readonly slopeOfColumn: Float64Array
+  private readonly slopes: Float64Array
   private readonly hasLevel: boolean
-  private readonly hasSlope: boolean
+  /** Numerators of the two bases, whitened; the denominator of both is 1 + K·x. */
+  private readonly lowTop: Float64Array
+  private readonly highTop: Float64Array
 
   constructor(private readonly data: ScaledData, linear: LinearPart) {
     const { n, x, y, root } = data
     this.n = n
     this.hasLevel = linear.level === null
-    this.hasSlope = linear.slope === null
+    const hasSlope = linear.slope === null
     this.column = new Float64Array(n)
-    this.slopeOfColumn = new Float64Array(n)
+    this.slopes = new Float64Array(n)
     this.target = new Float64Array(n)
-    for (let i = 0; i < n; i++) this.target[i] = (y[i]! - (linear.level ?? 0) - (linear.slope ?? 0) * x[i]!) * root[i]!
+    this.lowTop = new Float64Array(n)
+    this.highTop = new Float64Array(n)
+    for (let i = 0; i < n; i++) {
+      this.target[i] = (y[i]! - (linear.level ?? 0) - (linear.slope ?? 0) * x[i]!) * root[i]!
+      this.lowTop[i] = (hasSlope ? x[i]! * x[i]! : x[i]!) * root[i]!
+      this.highTop[i] = (this.hasLevel ? 1 : x[i]!) * root[i]!
+    }
     if (this.hasLevel) this.addConstant(root.slice())
-    if (this.hasSlope) this.addConstant(x.map((value, i) => value * root[i]!))
+    if (hasSlope) this.addConstant(x.map((value, i) => value * root[i]!))
     for (const column of this.constant) project(this.target, column)
   }
 
@@ -80,38 +85,38 @@ export class BindingProfile {
   }
 
   at(logK: number): number {
-    const { n, column, slopeOfColumn, data: { x, root } } = this
+    const { n, column, slopes, data: { x } } = this
     const k = Math.exp(logK)
-    const isLow = this.isLowBasis = k < 1
-    const isFalling = isLow || this.hasLevel
+    const top = k < 1 ? this.lowTop : this.highTop
     for (let i = 0; i < n; i++) {
-      const xi = x[i]!
-      const t = 1 / (1 + k * xi)
-      const g = root[i]! * (isLow ? (this.hasSlope ? xi * xi * t : xi * t) : (this.hasLevel ? t : k * xi * t))
-      column[i] = g
-      slopeOfColumn[i] = isFalling ? -k * xi * t * g : t * g
+      const t = 1 / (1 + k * x[i]!)
+      column[i] = top[i]! * t
+      slopes[i] = -k * x[i]! * t * column[i]!
     }
     this.solve()
     return this.sum
   }
 
   private solve(): void {
-    const { n, column, slopeOfColumn, target } = this
+    const { n, column, slopes, target } = this
     const before = square(column)
     for (const known of this.constant) project(column, known)
-    const gg = square(column)
+    let gg = 0
     let gy = 0
-    for (let i = 0; i < n; i++) gy += column[i]! * target[i]!
-    const a = this.coefficient = gg > 1e-26 * before ? gy / gg : 0
+    for (let i = 0; i < n; i++) {
+      gg += column[i]! * column[i]!
+      gy += column[i]! * target[i]!
+    }
+    const coefficient = gg > 1e-26 * before ? gy / gg : 0
     let sum = 0
     let dot = 0
     for (let i = 0; i < n; i++) {
-      const r = target[i]! - a * column[i]!
+      const r = target[i]! - coefficient * column[i]!
       sum += r * r
-      dot += r * slopeOfColumn[i]!
+      dot += r * slopes[i]!
     }
     this.sum = sum
-    this.derivative = -2 * a * dot
+    this.derivative = -2 * coefficient * dot
   }
 
   /**
@@ -122,10 +127,9 @@ export class BindingProfile {
     const { n, column, data: { x, root } } = this
     const hasStep = !this.hasLevel || x.includes(0)
     for (let i = 0; i < n; i++) {
-      const value = end === 'infinity' ? (hasStep ? Number(x[i]! > 0) : 1 / x[i]!) : this.hasSlope ? x[i]! * x[i]! : x[i]!
-      column[i] = value * root[i]!
+      column[i] = end === 'zero' ? this.lowTop[i]! : root[i]! * (hasStep ? Number(x[i]! > 0) : 1 / x[i]!)
     }
-    this.slopeOfColumn.fill(0)
+    this.slopes.fill(0)
     this.solve()
     return this.sum
   }

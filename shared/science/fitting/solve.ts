@@ -4,7 +4,7 @@ import { strongBinding, strongBindingPlateau, weakBinding, weakBindingLine } fro
 import { descendFrom, stopReasonOf, type Bounds } from './descend'
 import { columnLengths, marquardt } from './marquardt'
 import { modelObjective, type Objective } from './objective'
-import { polish, type Stationary } from './polish'
+import { examine, polish, type Stationary } from './polish'
 import { BindingProfile, profileRange, type ProfileMinimum } from './profile'
 import type { ScaledData } from './scale'
 import { searchShapes } from './search'
@@ -87,20 +87,20 @@ function solveByProfile(problem: Problem): Solution {
   return refine(problem, startFrom(problem, minimum))
 }
 
-/** The linear parameters at a given K, by a fit that holds it. */
+/** The linear parameters at a given K: one Gauss–Newton step, exact because the model is linear in them. */
 function startFrom(problem: Problem, minimum: ProfileMinimum): Float64Array {
   const k = indexOf(problem.model, 'K')
   const value = Math.exp(minimum.at as number)
   const held = problem.held.slice()
   held[k] = value
   const objective = modelObjective(problem.model, problem.data, held)
-  const linear = polish(objective, new Float64Array(objective.size), 2).point
+  const step = new Float64Array(objective.size)
+  examine(objective, new Float64Array(objective.size), step)
   const start = new Float64Array(objective.size + 1)
   let from = 0
   let to = 0
   for (let j = 0; j < held.length; j++) {
-    if (!Number.isNaN(problem.held[j])) continue
-    start[to++] = j === k ? value : linear[from++]!
+    if (Number.isNaN(problem.held[j])) start[to++] = j === k ? value : -step[from++]!
   }
   return start
 }
