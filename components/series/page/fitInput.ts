@@ -1,0 +1,30 @@
+import type { Series } from '#shared/contracts/series'
+import type { NamedRequest } from '#shared/science/diagnostics/influence'
+
+export type SeriesReading = Series['readings'][number]
+
+/** The readings behind the fit, as the server takes them: exact ones that are not set aside. */
+export function usedReadings({ readings }: Series): SeriesReading[] {
+  return readings.filter(reading => reading.limit === 'exact' && !reading.setAside)
+}
+
+/** The request that gives the series' current fit again; null without a fit of a named model. */
+export function fitRequest(series: Series, readings = usedReadings(series)): NamedRequest | null {
+  const { fit } = series
+  if (!fit || fit.model === 'expression') return null
+  return {
+    model: fit.model,
+    weighting: fit.weighting,
+    sdMeaning: fit.sdMeaning,
+    points: readings.map(({ x, y, sd, n }) => ({ x, y, ...(sd !== null && { sd }), ...(n !== null && { n }) })),
+  }
+}
+
+/** The constant that matters most of a model: K where it binds, else the slope. */
+export function leadingConstant(series: Series) {
+  const parameters = series.fit?.parameters ?? []
+  const leading = parameters.find(({ name }) => name === 'K') ?? parameters.find(({ name }) => name === 'c')
+  return leading && leading.estimate !== null && leading.standardError !== null
+    ? { name: leading.name, unit: leading.unit, estimate: leading.estimate, standardError: leading.standardError }
+    : null
+}
