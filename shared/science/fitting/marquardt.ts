@@ -12,14 +12,7 @@ export interface Marquardt {
 
 export function marquardt(objective: Objective): Marquardt {
   const { readings, size } = objective
-  const indices = new Float64Array(readings)
-  for (let i = 0; i < readings; i++) indices[i] = i
-  const data = { x: indices, y: new Float64Array(readings) }
-  const residuals = new Float64Array(readings)
-  const jacobian = new Float64Array(readings * size)
-  const point = new Float64Array(size)
-  const partials = new Array<number>(size).fill(0)
-  const unbounded = { minValues: new Array<number>(size).fill(-Infinity), maxValues: new Array<number>(size).fill(Infinity) }
+  const { data, residuals, jacobian, point, partials, bounds } = roomFor(readings, size)
 
   function step(start: Float64Array, scales: Float64Array, damping: number, iterations: number): Float64Array | null {
     let isCurrent = false
@@ -47,7 +40,7 @@ export function marquardt(objective: Objective): Marquardt {
         moveTo(scaled)
         return residualAt
       }, {
-        initialValues, damping, maxIterations: iterations, errorTolerance: 0, ...unbounded,
+        initialValues, damping, maxIterations: iterations, errorTolerance: 0, ...bounds,
         jacobianFunction: (scaled) => {
           moveTo(scaled)
           objective.jacobian(point, jacobian)
@@ -63,6 +56,38 @@ export function marquardt(objective: Objective): Marquardt {
     }
   }
   return { step }
+}
+
+interface Room {
+  data: { x: Float64Array, y: Float64Array }
+  residuals: Float64Array
+  jacobian: Float64Array
+  point: Float64Array
+  partials: number[]
+  bounds: { minValues: number[], maxValues: number[] }
+}
+
+const rooms = new Map<number, Room>()
+const mostRooms = 50
+const sizeLimit = 1_000
+
+/** Arrays for one step, kept by size: nothing in them outlives a step, and bootstraps take thousands of the same. */
+function roomFor(readings: number, size: number): Room {
+  const key = readings * sizeLimit + size
+  const known = rooms.get(key)
+  if (known) return known
+  const room: Room = {
+    // The readings are addressed by number; the target of every residual is zero.
+    data: { x: Float64Array.from({ length: readings }, (_, i) => i), y: new Float64Array(readings) },
+    residuals: new Float64Array(readings),
+    jacobian: new Float64Array(readings * size),
+    point: new Float64Array(size),
+    partials: new Array<number>(size).fill(0),
+    bounds: { minValues: new Array<number>(size).fill(-Infinity), maxValues: new Array<number>(size).fill(Infinity) },
+  }
+  if (rooms.size >= mostRooms) rooms.clear()
+  rooms.set(key, room)
+  return room
 }
 
 /** Lengths of the columns of a Jacobian; 1 for a column of zeros. */

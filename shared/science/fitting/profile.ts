@@ -29,6 +29,10 @@ export interface ProfileMinimum {
   sum: number
 }
 
+/** Share of a column's square that must be left after projection for it to be a direction of its own. */
+const smallestRest = 1e-26
+/** On ln K; the polish finds the remaining digits. */
+const rootTolerance = 1e-10
 const gridStep = Math.LN10 / 8
 const reach = 3 * Math.LN10
 /** Largest x beside the smallest positive x that the grid follows. */
@@ -40,7 +44,10 @@ export class BindingProfile {
   derivative = 0
 
   private readonly n: number
-  private readonly constant: Float64Array[] = []
+  /** Orthonormal basis of the columns that do not depend on K; zeros where there is none. */
+  private readonly first: Float64Array
+  private readonly second: Float64Array
+  private coefficient = 0
   private readonly target: Float64Array
   private readonly column: Float64Array
   private readonly slopes: Float64Array
@@ -64,19 +71,12 @@ export class BindingProfile {
       this.lowTop[i] = (hasSlope ? x[i]! * x[i]! : x[i]!) * root[i]!
       this.highTop[i] = (this.hasLevel ? 1 : x[i]!) * root[i]!
     }
-    if (this.hasLevel) this.addConstant(root.slice())
-    if (hasSlope) this.addConstant(x.map((value, i) => value * root[i]!))
-    for (const column of this.constant) project(this.target, column)
-  }
-
-  private addConstant(column: Float64Array): void {
-    const before = norm(column)
-    // Twice is enough: the second pass removes what rounding left in the first.
-    for (let pass = 0; pass < 2; pass++) for (const known of this.constant) project(column, known)
-    const length = norm(column)
-    if (length <= 1e-13 * before) return
-    for (let i = 0; i < this.n; i++) column[i]! /= length
-    this.constant.push(column)
+    this.first = this.hasLevel ? unit(root.slice()) : new Float64Array(n)
+    const slope = new Float64Array(n)
+    if (hasSlope) for (let i = 0; i < n; i++) slope[i] = x[i]! * root[i]!
+    this.second = unit(slope, this.first)
+    project(this.target, this.first)
+    project(this.target, this.second)
   }
 
   /** Sum of squares with no binding term at all. */
@@ -84,30 +84,11 @@ export class BindingProfile {
     return square(this.target)
   }
 
+  /** Sets `sum` and `derivative` at a value of ln K. */
   at(logK: number): number {
-    const { n, column, slopes, data: { x } } = this
-    const k = Math.exp(logK)
-    const top = k < 1 ? this.lowTop : this.highTop
-    for (let i = 0; i < n; i++) {
-      const t = 1 / (1 + k * x[i]!)
-      column[i] = top[i]! * t
-      slopes[i] = -k * x[i]! * t * column[i]!
-    }
-    this.solve()
-    return this.sum
-  }
-
-  private solve(): void {
     const { n, column, slopes, target } = this
-    const before = square(column)
-    for (const known of this.constant) project(column, known)
-    let gg = 0
-    let gy = 0
-    for (let i = 0; i < n; i++) {
-      gg += column[i]! * column[i]!
-      gy += column[i]! * target[i]!
-    }
-    const coefficient = gg > 1e-26 * before ? gy / gg : 0
+    this.derivative = this.slopeAt(logK)
+    const coefficient = this.coefficient
     let sum = 0
     let dot = 0
     for (let i = 0; i < n; i++) {
@@ -117,6 +98,38 @@ export class BindingProfile {
     }
     this.sum = sum
     this.derivative = -2 * coefficient * dot
+    return sum
+  }
+
+  /** The derivative by ln K without the residuals: less exact near a minimum, enough to see its sign on the grid. */
+  private slopeAt(logK: number): number {
+    const { n, column, slopes, target, data: { x }, first, second } = this
+    const k = Math.exp(logK)
+    const top = k < 1 ? this.lowTop : this.highTop
+    let onFirst = 0
+    let onSecond = 0
+    for (let i = 0; i < n; i++) {
+      const t = 1 / (1 + k * x[i]!)
+      const g = top[i]! * t
+      column[i] = g
+      slopes[i] = -k * x[i]! * t * g
+      onFirst += g * first[i]!
+      onSecond += g * second[i]!
+    }
+    let gg = 0
+    let gy = 0
+    let gs = 0
+    let ys = 0
+    for (let i = 0; i < n; i++) {
+      const rest = column[i]! - onFirst * first[i]! - onSecond * second[i]!
+      column[i] = rest
+      gg += rest * rest
+      gy += rest * target[i]!
+      gs += rest * slopes[i]!
+      ys += target[i]! * slopes[i]!
+    }
+    const coefficient = this.coefficient = gg > smallestRest * (gg + onFirst * onFirst + onSecond * onSecond) ? gy / gg : 0
+    return -2 * coefficient * (ys - coefficient * gs)
   }
 
   /**
@@ -124,14 +137,19 @@ export class BindingProfile {
    * there are none and the level is free, a term in 1/x.
    */
   limit(end: 'zero' | 'infinity'): number {
-    const { n, column, data: { x, root } } = this
+    const { n, column, target, data: { x, root } } = this
     const hasStep = !this.hasLevel || x.includes(0)
     for (let i = 0; i < n; i++) {
       column[i] = end === 'zero' ? this.lowTop[i]! : root[i]! * (hasStep ? Number(x[i]! > 0) : 1 / x[i]!)
     }
-    this.slopes.fill(0)
-    this.solve()
-    return this.sum
+    const before = square(column)
+    project(column, this.first)
+    project(column, this.second)
+    const gg = square(column)
+    const coefficient = gg > smallestRest * before ? dot(column, target) / gg : 0
+    let sum = 0
+    for (let i = 0; i < n; i++) sum += (target[i]! - coefficient * column[i]!) ** 2
+    return sum
   }
 
   /** Lowest point over the range, limits and bounds included. */
@@ -147,9 +165,9 @@ export class BindingProfile {
     }
     for (let j = 1; j <= steps; j++) {
       const logK = j === steps ? range.high : range.low + (range.high - range.low) * j / steps
-      const derivative = derivativeAt(logK)
+      const derivative = this.slopeAt(logK)
       if (previousDerivative < 0 && derivative >= 0) {
-        const at = findRoot(derivativeAt, previous, logK, previousDerivative, derivative, 1e-12)
+        const at = findRoot(derivativeAt, previous, logK, previousDerivative, derivative, rootTolerance)
         const sum = this.at(at)
         if (sum < best.sum) best = { at, isAtBound: false, sum }
       }
@@ -189,12 +207,23 @@ function square(v: Float64Array): number {
   return sum
 }
 
-function norm(v: Float64Array): number {
-  return Math.sqrt(square(v))
+function dot(a: Float64Array, b: Float64Array): number {
+  let sum = 0
+  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!
+  return sum
 }
 
-function project(v: Float64Array, unit: Float64Array): void {
-  let dot = 0
-  for (let i = 0; i < v.length; i++) dot += v[i]! * unit[i]!
-  for (let i = 0; i < v.length; i++) v[i]! -= dot * unit[i]!
+/** A column at unit length, off another one; zeros where nothing is left. Twice: the second pass removes rounding. */
+function unit(column: Float64Array, other?: Float64Array): Float64Array {
+  const before = square(column)
+  if (other) for (let pass = 0; pass < 2; pass++) project(column, other)
+  const after = square(column)
+  const scale = after > smallestRest * before ? 1 / Math.sqrt(after) : 0
+  for (let i = 0; i < column.length; i++) column[i]! *= scale
+  return column
+}
+
+function project(v: Float64Array, onto: Float64Array): void {
+  const amount = dot(v, onto)
+  for (let i = 0; i < v.length; i++) v[i]! -= amount * onto[i]!
 }
