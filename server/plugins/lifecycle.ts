@@ -2,10 +2,11 @@ import { defineNitroPlugin, sessionHooks } from '#imports'
 import { createError } from 'h3'
 import { closeDatabase } from '~~/server/database/client'
 import { sessionPerson } from '~~/server/services/sessions'
-import { closeFitPool } from '~~/server/services/fit-pool'
+import { closeFitPool, warmFitPool } from '~~/server/services/fit-pool'
 
-/** Ends what is open when the process is asked to stop. */
+/** Starts the threads for fits, and ends what is open when the process is asked to stop. */
 export default defineNitroPlugin((app) => {
+  warmFitPool()
   app.hooks.hook('close', async () => {
     await closeFitPool()
     await closeDatabase()

@@ -1,7 +1,6 @@
 import { maximumPoints } from '#shared/contracts/fit'
-import type { InputProblem } from '#shared/science/errors'
+import { ScienceError, type InputProblem } from '#shared/science/errors'
 import { fit } from '#shared/science/fitting'
-import { checkNamed, checkReadings, collect } from '#shared/science/fitting/check'
 import type { FitRequest, FitResult } from '#shared/science/fitting/types'
 import { fitInPool } from './fit-pool'
 
@@ -20,18 +19,22 @@ export async function fitFreely(request: FitRequest): Promise<FitResult> {
   return isQuick ? fit(request) : fitInPool(request)
 }
 
-/** What the engine finds wrong with a body that already failed its contract. */
-export function furtherFaults(given: unknown): InputProblem[] {
+/** What the engine finds wrong with a body that already failed its contract, so that all faults are told at once. */
+export async function furtherFaults(given: unknown): Promise<readonly InputProblem[]> {
   if (!isRequestLike(given) || given.points.length > maximumPoints) return []
-  return collect((report) => {
-    checkReadings(given, report)
-    if (typeof given.model === 'string') checkNamed(given, report)
-  })
+  try {
+    await fitInPool(given)
+    return []
+  }
+  catch (error) {
+    // A body of the wrong shape may break more than it says; the contract's faults stand in any case.
+    return error instanceof ScienceError ? error.problems : []
+  }
 }
 
 function isRequestLike(given: unknown): given is FitRequest {
-  return typeof given === 'object' && given !== null && 'points' in given && Array.isArray(given.points)
-    && given.points.every(point => typeof point === 'object' && point !== null)
+  return isRecord(given) && Array.isArray(given.points) && given.points.every(isRecord)
+    && (typeof given.model === 'string' || isRecord(given.model))
     && (!('parameters' in given) || (isRecord(given.parameters) && Object.values(given.parameters).every(isRecord)))
 }
 

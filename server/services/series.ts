@@ -4,6 +4,7 @@ import { ScienceError } from '#shared/science/errors'
 import { asPerson, type Transaction } from '~~/server/database/client'
 import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
 import { conditionsOf } from './conditions'
+import { ServiceError } from './errors'
 import { compareInPool } from './fit-pool'
 import { currentFits, pointsOf, usualOptions } from './fits'
 import { cursorOf, pageOf, type Page } from './pages'
@@ -54,24 +55,26 @@ function summaryOf(head: Head, content: SeriesContent, fits: Awaited<ReturnType<
 }
 
 /** One series: readings, current fit, how the models compare, revisions. */
-export function showSeries(who: string, id: string): Promise<Series> {
-  return asPerson(who, async (tx) => {
-    const [found] = await heads(tx).where(eq(series.id, id))
-    const head = found!
-    const content = (await contentOf(tx, [id])).get(id)!
-    const fits = await currentFits(tx, content.revision ? [content.revision.id] : [])
-    return {
-      id,
-      project: head.project,
-      salt: saltOf(head),
-      campaign: { ...campaignOf(head), conditions: conditionsOf(head) },
-      revision: content.revision?.number ?? null,
-      readings: content.readings,
-      fit: (content.revision && fits.get(content.revision.id)) ?? null,
-      support: await supportFor(content),
-      revisions: await revisionsOf(tx, id),
-    }
-  })
+export async function showSeries(who: string, id: string): Promise<Series> {
+  const { head, content, fits, revisions } = await asPerson(who, tx => readSeries(tx, id))
+  return {
+    id,
+    project: head.project,
+    salt: saltOf(head),
+    campaign: { ...campaignOf(head), conditions: conditionsOf(head) },
+    revision: content.revision?.number ?? null,
+    readings: content.readings,
+    fit: (content.revision && fits.get(content.revision.id)) ?? null,
+    support: await supportFor(content),
+    revisions,
+  }
+}
+
+async function readSeries(tx: Transaction, id: string) {
+  const [found] = await heads(tx).where(eq(series.id, id))
+  const content = (await contentOf(tx, [id])).get(id)!
+  const fits = await currentFits(tx, content.revision ? [content.revision.id] : [])
+  return { head: found!, content, fits, revisions: await revisionsOf(tx, id) }
 }
 
 async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisions']> {
@@ -89,8 +92,8 @@ async function supportFor(content: SeriesContent): Promise<Series['support']> {
     return { verdict, models }
   }
   catch (error) {
-    // Readings that no model takes are no failure of the page: it shows them without a comparison.
-    if (error instanceof ScienceError) return { verdict: null, models: [] }
+    // Readings that no model takes, or a busy machine, are no failure of the page: it shows them without a comparison.
+    if (error instanceof ScienceError || error instanceof ServiceError) return { verdict: null, models: [] }
     throw error
   }
 }

@@ -23,26 +23,28 @@ export async function readJson(event: H3Event, limit: number): Promise<unknown> 
   }
 }
 
+/** Beyond this many times the limit nobody is waiting for a sentence any more. */
+const patience = 10
+
+/** Collects the body up to the limit; what exceeds it is read and dropped, so that the sender hears the answer. */
 async function readBytes(event: H3Event, limit: number): Promise<Buffer> {
-  const tooLarge = () => {
-    // What is still on its way is read and dropped, so that the answer arrives; then the connection ends.
-    setResponseHeader(event, 'connection', 'close')
-    event.node.req.resume()
-    return new ServiceError('too-large', `The body is larger than ${Math.round(limit / 1_000_000)} MB, the most this address takes.`)
-  }
-  if (Number(getRequestHeader(event, 'content-length') ?? 0) > limit) throw tooLarge()
+  const { req } = event.node
   // A page rendered on the server calls without a socket; its body is already in memory.
-  if ('body' in event.node.req) return await readRawBody(event, false) ?? Buffer.alloc(0)
+  if ('body' in req) return await readRawBody(event, false) ?? Buffer.alloc(0)
   return new Promise((resolve, reject) => {
     const chunks: Buffer[] = []
     let size = 0
-    event.node.req.on('data', (chunk: Buffer) => {
+    const refuse = () => {
+      setResponseHeader(event, 'connection', 'close')
+      reject(new ServiceError('too-large', `The body is larger than ${Math.round(limit / 1_000_000)} MB, the most this address takes. Send less at once.`))
+    }
+    req.on('data', (chunk: Buffer) => {
       size += chunk.length
-      if (size <= limit) return chunks.push(chunk)
-      chunks.length = 0
-      reject(tooLarge())
+      if (size <= limit) chunks.push(chunk)
+      else chunks.length = 0
+      if (size > limit * patience) refuse()
     })
-    event.node.req.on('end', () => resolve(Buffer.concat(chunks)))
-    event.node.req.on('error', reject)
+    req.on('end', () => size > limit ? refuse() : resolve(Buffer.concat(chunks)))
+    req.on('error', reject)
   })
 }

@@ -23,11 +23,17 @@ function faultsOf(issue: Issue, root: string): Fault[] {
 
 // Of the shapes a value may have, the one it comes closest to is the one worth talking about.
 function faultsOfUnion(issue: Extract<Issue, { code: 'invalid_union' }>, path: string): Fault[] {
-  const branches = issue.errors.filter(branch => !branch.some(one => one.path.length === 0 && one.code === 'invalid_type'))
-  const closest = branches.sort((one, other) => one.length - other.length)[0]
+  const isAtRoot = ({ code, path: inside }: Issue) => inside.length === 0 && (code === 'invalid_type' || code === 'invalid_value')
+  const inside = issue.errors.filter(branch => !branch.some(isAtRoot))
+  const closest = inside.sort((one, other) => one.length - other.length)[0]
   if (closest) return closest.flatMap(one => faultsOf(one, path))
-  const shapes = issue.errors.flat().map(one => one.code === 'invalid_value' ? `one of ${one.values.map(String).join(', ')}` : one.code === 'invalid_type' ? `a JSON ${one.expected}` : '')
-  return [{ path, message: `must be ${[...new Set(shapes.filter(Boolean))].join(' or ')}` }]
+  const shapes = [...new Set(issue.errors.flat().filter(isAtRoot).map(shapeOf))].join(', or ')
+  return [{ path, message: issue.input === undefined ? `is missing; it must be ${shapes}` : `must be ${shapes}` }]
+}
+
+function shapeOf(issue: Issue): string {
+  if (issue.code === 'invalid_value') return `one of ${issue.values.map(String).join(', ')}`
+  return issue.code === 'invalid_type' ? kinds[issue.expected] ?? issue.expected : ''
 }
 
 const kinds: Record<string, string> = { number: 'a finite number', int: 'a whole number', string: 'text', array: 'a list', object: 'an object', record: 'an object', boolean: 'true or false' }

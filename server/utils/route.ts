@@ -33,7 +33,7 @@ export interface Declaration<Person extends Visitor | null = Visitor | null, Par
   /** Most bytes of the body. */
   bodyLimit?: number
   /** Faults that only show beside each other, looked for when the contract has already found some: so that all come at once. */
-  examineFurther?: (given: unknown) => readonly Fault[]
+  examineFurther?: (given: unknown) => Promise<readonly Fault[]>
   /** Called before anything is read: refuses who calls too often. */
   admitRate?: (event: H3Event) => Promise<void>
   handle: (call: Call<Person, Params, Query, Input>) => Given | Promise<Given> | AsyncIterable<StreamedEvent>
@@ -100,7 +100,7 @@ async function readInput<Query, Input>(
   const taken = { query: take(query, getQuery(event), 'query'), input: take(input, body) }
   if (faults.length > 0) {
     const known = new Set(faults.map(({ path }) => path))
-    faults.push(...(examineFurther?.(body) ?? []).filter(({ path }) => !known.has(path)))
+    faults.push(...(await examineFurther?.(body) ?? []).filter(({ path }) => !known.has(path)))
     throw new ServiceError('invalid', countSentence(faults.length), { faults })
   }
   return taken

@@ -8,6 +8,9 @@ export function setting(name: 'ANIONARY_TEST_URL' | 'DATABASE_URL' | 'DATABASE_O
 }
 
 export const address = setting('ANIONARY_TEST_URL')
+/** Reads all of an agent's cookies. */
+export const everywhere = { domain: new URL(address).hostname, path: '/', secure: false, script: false } as never
+
 export const nobody = () => request.agent(address)
 
 /** The demo's people by what they are to its project. */
