@@ -1,6 +1,7 @@
 import { sql } from 'drizzle-orm'
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { Pool } from 'pg'
+import { logger } from '../utils/logger'
 import * as schema from './schema'
 
 /** A transaction in which it is settled who asks. Services take one; none of them opens its own connection. */
@@ -9,10 +10,13 @@ export type Transaction = Parameters<Parameters<ReturnType<typeof connect>['data
 /** Why the system itself may look: the doors of sign-in, jobs, rate limits and readiness, and nothing else. */
 export type SystemReason = 'sign-in' | 'session' | 'job' | 'rate-limit' | 'readiness'
 
+/** Connections of one process; PostgreSQL's own default allows 100 in all. */
+const mostConnections = 10
+
 function connect(connectionString: string | undefined) {
-  const pool = new Pool({ connectionString, max: 10 })
-  // An idle connection may die with the server; the next query opens a fresh one.
-  pool.on('error', () => {})
+  const pool = new Pool({ connectionString, max: mostConnections })
+  // An idle connection may die with the database server: unheard, that would end the process; the next query opens a fresh one.
+  pool.on('error', error => logger().warn({ err: error }, 'an idle database connection was lost'))
   return { pool, database: drizzle(pool, { schema }) }
 }
 

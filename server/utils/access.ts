@@ -82,13 +82,3 @@ function jobRule(name: string, sentence: string, wanted: 'own' | 'see'): AccessR
 
 export const jobWatcher = jobRule('jobWatcher', 'The person who started the job and the members of its project.', 'see')
 export const jobOwner = jobRule('jobOwner', 'The person who started the job.', 'own')
-
-export const siteAdmin: AccessRule<Visitor> = {
-  name: 'siteAdmin',
-  sentence: 'Administrators of this installation.',
-  async admit(event) {
-    const visitor = await signedInVisitor(event)
-    if (!visitor.siteRoles.includes('admin')) throw nowhere()
-    return visitor
-  },
-}

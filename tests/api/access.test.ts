@@ -14,7 +14,6 @@ const expected: Record<string, Record<Visitor, 'in' | 401 | 403 | 404>> = {
   seriesReader: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
   jobWatcher: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
   jobOwner: { 'signed out': 401, 'owner': 'in', 'member': 403, 'collaborator': 403, 'outsider': 404, 'admin': 404 },
-  siteAdmin: { 'signed out': 401, 'owner': 404, 'member': 404, 'collaborator': 404, 'outsider': 404, 'admin': 'in' },
 }
 
 type Visitor = 'signed out' | Part
