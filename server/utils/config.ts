@@ -30,6 +30,7 @@ const settings = z.object({
   ANIONARY_URL: url('http:', 'https:').default('http://127.0.0.1:3000'),
   ANIONARY_DEMO: flag.default(true),
   ANIONARY_PUBLIC_FIT_PER_MINUTE: z.coerce.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').default(120),
+  ANIONARY_TRUST_PROXY: flag.default(false),
   LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'fatal', 'silent']).default('info'),
 })
 

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import { sodiumSalts } from '#shared/science/chemistry/salts'
 import type { DemoReading } from '~~/data-seeds/demo/generate'
@@ -21,8 +21,8 @@ export const campaignKey = (labName: string, name: string) => `${labName}, ${nam
 export const batchKey = (labName: string, day: string) => `${labName} ${day}`
 
 async function labIds(tx: Transaction): Promise<Map<string, string>> {
-  const found = await Promise.all(labNames.map(async name => (await tx.select().from(lab).where(eq(lab.name, name)))[0]))
-  return new Map(found.flatMap(one => one ? [[one.name, one.id]] : []))
+  const found = await tx.select().from(lab).where(inArray(lab.name, labNames))
+  return new Map(found.map(one => [one.name, one.id]))
 }
 
 async function plantStocks(tx: Transaction, project: string, labs: ReadonlyMap<string, string>) {

@@ -9,7 +9,7 @@ import type { Transaction } from '../client'
 import { reading, revisionReading, series, seriesRevision } from '../schema'
 import { historyOf, type KnownReading, type PlannedRevision } from './demo-history'
 import { batchKey, campaignKey, labNames, plantPlaces, stockKey, type LabName, type Places } from './demo-places'
-import { personByEmail, projectByName, type Seed } from './seeding'
+import { peopleByEmail, projectByName, type Seed } from './seeding'
 
 interface SeriesPlan {
   id: string
@@ -93,7 +93,7 @@ export const demo: Seed = {
     const places = await plantPlaces(tx, project, readings)
     const plans = planSeries(project, places, readings)
     const emails = [...new Set(plans.flatMap(plan => plan.revisions.map(revision => revision.by)))]
-    const people = new Map(await Promise.all(emails.map(async email => [email, await personByEmail(tx, email)] as const)))
+    const people = await peopleByEmail(tx, emails)
 
     await tx.insert(series).values(plans.map(plan => plan.row))
     await tx.insert(reading).values([

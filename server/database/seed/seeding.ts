@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { eq, inArray } from 'drizzle-orm'
 import type { Transaction } from '../client'
 import { person, project } from '../schema'
 
@@ -8,11 +8,12 @@ export interface Seed {
   plant: (tx: Transaction) => Promise<void>
 }
 
-/** The id of a demo account, for seeds that come after the accounts. */
-export async function personByEmail(tx: Transaction, email: string): Promise<string> {
-  const [found] = await tx.select({ id: person.id }).from(person).where(eq(person.email, email))
-  if (!found) throw new Error(`the seed of accounts has no ${email}`)
-  return found.id
+/** The ids of demo accounts by their addresses, for seeds that come after the accounts. */
+export async function peopleByEmail(tx: Transaction, emails: string[]): Promise<Map<string, string>> {
+  const found = await tx.select({ id: person.id, email: person.email }).from(person).where(inArray(person.email, emails))
+  const missing = emails.filter(email => !found.some(one => one.email === email))
+  if (missing.length > 0) throw new Error(`the seed of accounts has no ${missing.join(', ')}`)
+  return new Map(found.map(one => [one.email, one.id]))
 }
 
 /** The id of the demo project. */
