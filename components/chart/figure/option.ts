@@ -1,10 +1,9 @@
 import type { EChartsCoreOption } from 'echarts/core'
-import { fixed } from '#shared/science/notation'
-import type { Axis } from './axis'
+import { axisNames, axisShapes } from './axes'
 import { bandShapes, curveShapes, noSaltShapes, straightLineShapes } from './curves'
-import { frameOf, type Frame, type Rectangle } from './frame'
+import { frameOf, type Frame } from './frame'
 import { readingShapes, residualShapes } from './marks'
-import { line, plainText, type PathShape, type Shape } from './shapes'
+import { line, type PathShape, type Shape } from './shapes'
 import { dotsPath, stipple } from './stipple'
 import { toElement } from './elements'
 import type { FigureContent, Palette } from './types'
@@ -34,25 +33,13 @@ function residualRules(frame: Frame, palette: Palette): Shape[] {
   return [rule(0), rule(limit, [1.5, 3.5]), rule(-limit, [1.5, 3.5])]
 }
 
-/** Names of the axes stand above and at the right end, horizontal, quantity in italics over its unit. */
-function axisNames(frame: Frame, palette: Palette): Shape[] {
-  const right = frame.main.left + frame.main.width
-  const foot = frame.residual.top + frame.residual.height
-  const common = { kind: 'text', size: 12.5, fill: palette.ink } as const
-  return [
-    { ...common, runs: [{ text: 'T' }], x: 0, y: 10, align: 'left', isItalic: true },
-    { ...common, runs: [{ text: 'cp', place: 'sub' }, { text: ' / °C' }], x: 8, y: 10, align: 'left' },
-    { ...common, runs: [{ text: 'salt concentration [M] / mol L' }, { text: '−1', place: 'sup' }], x: right, y: foot + 33, align: 'right' },
-    { ...common, runs: plainText('residual / K'), size: 12, fill: palette.ink2, x: right, y: frame.residual.top - 4, align: 'right', halo: palette.paper },
-  ]
-}
-
 /** Everything drawn, layer by layer, in pixels. */
 export function figureLayers(content: FigureContent, frame: Frame, palette: Palette): Layer[] {
   const words = placeWords(content, frame, palette)
   return [
     { name: 'stipple', shapes: stippleShapes(content, frame, palette, words.boxes) },
     { name: 'no-salt line', shapes: noSaltShapes(content, frame, palette) },
+    { name: 'axes', shapes: axisShapes(frame, palette) },
     { name: 'band', shapes: bandShapes(content, frame, palette) },
     { name: 'straight line', shapes: straightLineShapes(content, frame, palette) },
     { name: 'curve', shapes: curveShapes(content, frame, palette) },
@@ -64,34 +51,15 @@ export function figureLayers(content: FigureContent, frame: Frame, palette: Pale
   ]
 }
 
-function gridOf({ left, top, width, height }: Rectangle) {
-  return { left, top, width, height, outerBoundsMode: 'none' as const }
-}
-
-function axisOption(axis: Axis, gridIndex: number, palette: Palette, tick: number, isLabelled = true) {
-  const values = isLabelled ? axis.ticks : []
-  return {
-    type: 'value' as const, gridIndex, min: axis.min, max: axis.max,
-    splitLine: { show: false },
-    axisLine: { show: true, onZero: false, lineStyle: { color: palette.rule, width: 1 } },
-    axisTick: { show: isLabelled, length: tick, lineStyle: { color: palette.rule }, customValues: values },
-    axisLabel: {
-      show: isLabelled, customValues: values, color: palette.ink2, fontSize: 12, fontFamily: 'IBM Plex Sans', margin: tick + 4, hideOverlap: false,
-      formatter: (value: number) => fixed(value, axis.decimals),
-    },
-  }
-}
-
-/** The ECharts option for a figure of a given size: two grids on one concentration axis, all marks as custom series. */
+/**
+ * The ECharts option for a figure of a given size. All marks are custom series in pixels, the axes too: the frame that
+ * lays them out also places the read-out and the words, and the library's own axes would nearly double its weight.
+ */
 export function figureOption(content: FigureContent, width: number, height: number, palette: Palette): EChartsCoreOption {
-  const frame = frameOf(content, width, height)
   return {
     animation: false,
-    grid: [gridOf(frame.main), gridOf(frame.residual)],
-    xAxis: [axisOption(frame.xAxis, 0, palette, 5, false), axisOption(frame.xAxis, 1, palette, 5)],
-    yAxis: [axisOption(frame.yAxis, 0, palette, 4), axisOption(frame.residualAxis, 1, palette, 4)],
-    series: figureLayers(content, frame, palette).map(({ name, shapes }, index) => ({
-      type: 'custom', id: name, name, silent: true, clip: false, z: index + 2, data: [0],
+    series: figureLayers(content, frameOf(content, width, height), palette).map(({ name, shapes }, index) => ({
+      type: 'custom', id: name, name, coordinateSystem: 'none', silent: true, z: index + 2, data: [0],
       renderItem: () => ({ type: 'group', children: shapes.map(toElement) }),
     })),
   }

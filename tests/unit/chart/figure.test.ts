@@ -106,16 +106,28 @@ describe('figureLayers', () => {
   })
 })
 
+describe('the axes', () => {
+  it('share the concentration and tell it once, under the residuals', () => {
+    const { frame, shapes } = layersOf({})
+    expect(frame.residual).toMatchObject({ left: frame.main.left, width: frame.main.width })
+    const labels = shapes('axes').flatMap(shape => shape.kind === 'text' && shape.align === 'center' ? [shape] : [])
+    expect(texts(labels)).toEqual(['0.0', '0.2', '0.4', '0.6', '0.8', '1.0'])
+    expect(labels.every(({ y }) => y > frame.residual.top + frame.residual.height)).toBe(true)
+  })
+
+  it('put each tick where its value is drawn', () => {
+    const { frame, shapes } = layersOf({})
+    const label = shapes('axes').find(shape => shape.kind === 'text' && shape.runs[0]?.text === '31')
+    expect(label?.kind === 'text' && Math.abs(label.y - frame.y(31))).toBeLessThanOrEqual(0.5)
+  })
+})
+
 describe('figureOption', () => {
-  it('puts both plots on one concentration axis and gives each layer a series', () => {
-    const option = figureOption(figureContent({ readings, fit: binding, ion: 'SCN^-' }), 720, 480, palette) as {
-      grid: { left: number, width: number }[]
-      xAxis: { min: number, max: number }[]
-      series: { id: string, silent: boolean }[]
-    }
-    expect(option.grid[0]).toMatchObject({ left: option.grid[1]!.left, width: option.grid[1]!.width })
-    expect(option.xAxis[0]).toMatchObject({ min: 0, max: option.xAxis[1]!.max })
-    expect(option.series.map(series => series.id)).toContain('band')
-    expect(option.series.every(series => series.silent)).toBe(true)
+  it('gives each layer a series, in drawing order, that answers no pointer', () => {
+    const { series } = figureOption(figureContent({ readings, fit: binding, ion: 'SCN^-' }), 720, 480, palette) as { series: { id: string, silent: boolean, z: number }[] }
+    const place = (id: string) => series.find(layer => layer.id === id)!.z
+    expect(place('stipple')).toBeLessThan(place('band'))
+    expect(place('curve')).toBeLessThan(place('readings'))
+    expect(series.every(({ silent }) => silent)).toBe(true)
   })
 })
