@@ -11,6 +11,7 @@ import { StopSentence } from './stop-sentence.mjs'
 /** @typedef {import('./postgres/cluster.mjs').Cluster} Cluster */
 
 const DUMP = 'database.dump'
+const JOURNAL = '.output/server/tools/migrations/meta/_journal.json'
 
 /**
  * Writes one .tar: the database and the stand-in's files. File storage elsewhere has its own backups.
@@ -58,7 +59,7 @@ export async function restore(cluster, data, file) {
  * @param {Cluster} cluster @param {string} data
  */
 export async function backUpBeforeMigrating(cluster, data) {
-  const journal = JSON.parse(readFileSync(join(root, '.output/server/tools/migrations/meta/_journal.json'), 'utf8'))
+  const journal = JSON.parse(readFileSync(join(root, JOURNAL), 'utf8'))
   const setup = { role: BOOTSTRAP, password: secretsOf(data).bootstrapPassword }
   const table = 'drizzle.__drizzle_migrations'
   const isEmpty = await query(cluster, setup, `select to_regclass('${table}') is null`) === 't'

@@ -4,11 +4,11 @@ import { lastWords, startChild } from './children.mjs'
 import { startCluster } from './postgres/cluster.mjs'
 import { databaseUrls, makeRoles } from './postgres/roles.mjs'
 import { until, whenGone } from './processes.mjs'
-import { must } from './run.mjs'
+import { run } from './run.mjs'
 import { appSettings, serviceSettings } from './settings.mjs'
 import { StopSentence } from './stop-sentence.mjs'
 
-export const TOOLS = '.output/server/tools'
+const TOOLS = '.output/server/tools'
 const READY_WITHIN_SECONDS = 60
 
 /**
@@ -47,10 +47,16 @@ export async function startStack(session, data, address) {
 async function startDatabase(session, data, children) {
   const urls = await externalDatabase() ?? await ownDatabase(session, data, children)
   const env = { ...urls, ANIONARY_DEMO: process.env.ANIONARY_DEMO || '1' }
-  await must([process.execPath, `${TOOLS}/migrate.mjs`], { env })
+  await runTool('migrate', env)
   session.checkpoint()
-  await must([process.execPath, `${TOOLS}/seed.mjs`], { env })
+  await runTool('seed', env)
   return urls
+}
+
+/** @param {string} name @param {Record<string, string>} env */
+async function runTool(name, env) {
+  const { code, stderr } = await run([process.execPath, `${TOOLS}/${name}.mjs`], { env })
+  if (code !== 0) throw new StopSentence(`${TOOLS}/${name}.mjs ended with ${code}:\n${stderr.trim()}`)
 }
 
 async function externalDatabase() {

@@ -28,7 +28,7 @@ const settings = z.object({
   NUXT_SESSION_PASSWORD: text.min(32, 'must have at least 32 characters'),
   NUXT_SESSION_COOKIE_SECURE: flag.default(true),
   ANIONARY_URL: url('http:', 'https:').default('http://127.0.0.1:3000'),
-  ANIONARY_DEMO: flag.default(true),
+  ANIONARY_DEMO: z.enum(['0', '1'], { error: 'must be 0 or 1' }).default('1').transform(value => value === '1'),
   ANIONARY_PUBLIC_FIT_PER_MINUTE: z.coerce.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').default(120),
   ANIONARY_TRUST_PROXY: flag.default(false),
   LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'fatal', 'silent']).default('info'),
@@ -45,7 +45,7 @@ export function readConfig(env: Record<string, string | undefined>): Config {
   const given = Object.fromEntries(Object.entries(env).filter(([, value]) => value !== ''))
   const parsed = settings.safeParse(given)
   const problems = parsed.success ? [] : parsed.error.issues.map(({ path, message }) => `${path.join('.')} ${message}`)
-  if (given.ANIONARY_DEMO === '0' || given.ANIONARY_DEMO === 'false') problems.push(...defaultSecrets(given))
+  if (given.ANIONARY_DEMO === '0') problems.push(...defaultSecrets(given))
   if (!parsed.success || problems.length > 0) throw new ConfigError(problems)
   return parsed.data
 }

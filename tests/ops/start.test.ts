@@ -85,6 +85,12 @@ describe('npm start', () => {
     expect(await first.end('SIGTERM')).toBe(0)
   })
 
+  it('refuses to open a database with demo accounts when ANIONARY_DEMO is 0', async () => {
+    const real = start({ ANIONARY_DEMO: '0' })
+    expect(await real.ended).toBe(1)
+    expect(real.output).toMatch(/holds the demo accounts.*ANIONARY_DATA/)
+  })
+
   it('reports a database that dies under it and stops the rest', async () => {
     const first = start()
     await first.prints(ready)

@@ -1,4 +1,4 @@
-/** Plants the demo as the owner: `node seed.mjs`. With ANIONARY_DEMO=0 nothing is planted and no demo account exists. */
+/** Plants the demo as the owner: `node seed.mjs`. With ANIONARY_DEMO=0 nothing is planted, and a database that holds the demo is refused. */
 import { eq } from 'drizzle-orm'
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { Client } from 'pg'
@@ -14,24 +14,32 @@ const seedLock = 7_220_452
 const connectionString = process.env.DATABASE_OWNER_URL
 if (!connectionString) throw new Error('DATABASE_OWNER_URL is not set: it is the address of the database as anionary_owner')
 
-if (process.env.ANIONARY_DEMO !== '0') await plantAll(connectionString)
+const client = new Client({ connectionString })
+const database = drizzle(client, { schema })
+await client.connect()
+try {
+  await client.query('select pg_advisory_lock($1)', [seedLock])
+  await (process.env.ANIONARY_DEMO === '0' ? refuseDemo() : plantAll())
+}
+finally {
+  await client.end()
+}
 
-async function plantAll(connectionString: string) {
-  const client = new Client({ connectionString })
-  await client.connect()
-  try {
-    await client.query('select pg_advisory_lock($1)', [seedLock])
-    const database = drizzle(client, { schema })
-    for (const seed of seeds) {
-      await database.transaction(async (tx) => {
-        const planted = await tx.select().from(schema.seed).where(eq(schema.seed.name, seed.name))
-        if (planted.length > 0) return
-        await seed.plant(tx)
-        await tx.insert(schema.seed).values({ name: seed.name })
-      })
-    }
+async function plantAll() {
+  for (const seed of seeds) {
+    await database.transaction(async (tx) => {
+      const planted = await tx.select().from(schema.seed).where(eq(schema.seed.name, seed.name))
+      if (planted.length > 0) return
+      await seed.plant(tx)
+      await tx.insert(schema.seed).values({ name: seed.name })
+    })
   }
-  finally {
-    await client.end()
-  }
+}
+
+/** The demo's password is known to everybody: its accounts must not open a database that is meant to be real. */
+async function refuseDemo() {
+  const planted = await database.select().from(schema.seed)
+  if (planted.length === 0) return
+  console.error('ANIONARY_DEMO is 0 and this database holds the demo accounts: start with an empty database or data folder (ANIONARY_DATA).')
+  process.exitCode = 1
 }

@@ -44,7 +44,8 @@ describe('readConfig', () => {
     expect(problemsOf({ ...complete, [name]: value })).toEqual([expect.stringMatching(`^${name} `)])
   })
 
-  it.each(['0', 'false'])('refuses default secrets with ANIONARY_DEMO=%s', (ANIONARY_DEMO) => {
+  it('refuses default secrets with ANIONARY_DEMO=0', () => {
+    const ANIONARY_DEMO = '0'
     const defaults = {
       S3_SECRET_ACCESS_KEY: 'S3RVER',
       NUXT_SESSION_PASSWORD: 'change-me-change-me-change-me-change-me',
