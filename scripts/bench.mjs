@@ -42,17 +42,19 @@ function hasScipy() {
 
 /** @param {(string | number)[][]} rows */
 function printTable(rows) {
-  const widths = rows[0].map((_, column) => Math.max(...rows.map(row => String(row[column]).length)))
-  for (const row of rows) console.log(row.map((cell, column) => column === 0 ? String(cell).padEnd(widths[0]) : String(cell).padStart(widths[column])).join('   '))
+  const widthOf = (/** @type {number} */ column) => Math.max(...rows.map(row => String(row[column]).length))
+  const pad = (/** @type {string | number} */ cell, /** @type {number} */ column) =>
+    column === 0 ? String(cell).padEnd(widthOf(column)) : String(cell).padStart(widthOf(column))
+  for (const row of rows) console.log(row.map(pad).join('   '))
 }
 
-const microseconds = value => `${value.toFixed(1)} µs`
+const microseconds = (/** @type {number} */ value) => `${value.toFixed(1)} µs`
 
 const engine = await measureEngine()
 const scipy = hasScipy() ? measure('python3', [join(root, 'tests/bench/reference.py'), series]) : null
 if (!scipy) console.log('scipy is missing, so there are no ratios; install it with: sudo apt-get install -y python3-scipy')
 
-const ratio = reference => scipy ? `${(scipy[reference] / engine.core).toFixed(1)} ×` : 'no scipy'
+const ratio = (/** @type {'near' | 'default'} */ reference) => scipy ? `${(scipy[reference] / engine.core).toFixed(1)} ×` : 'no scipy'
 printTable([
   ['12-point linear-langmuir', 'measured', 'beside', 'goal'],
   ['fit with covariance', microseconds(engine.core), '', ''],
