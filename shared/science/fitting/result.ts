@@ -148,7 +148,7 @@ function profileEnds(analysis: Analysis, errors: Map<string, number>, delta: num
   const isCurved = problem.model.parameters.some((parameter, j) => parameter.isShape && Number.isNaN(problem.held[j]))
   const hasBounds = free.some(j => !problem.model.parameters[j]!.isShape && (problem.lower[j]! > -Infinity || problem.upper[j]! < Infinity))
   if (!isCurved && !hasBounds) return new Map()
-  if (canProfile(problem) && !hasBounds && solution.stopReason !== 'bound') return conditionalIntervals(solution, delta)
+  if (canProfile(problem) && !hasBounds) return conditionalIntervals(solution, delta)
   if (solution.end) return new Map()
   return refitEnds(analysis, errors, delta)
 }
