@@ -1,6 +1,14 @@
-import { expect, test } from '@playwright/test'
+import { expect, test, type Locator } from '@playwright/test'
 import { seriousViolations, sidewaysScroll } from '../support/axe'
 import { demoSeriesPath, signInAs } from '../support/demo'
+
+/** A control answers once the page is alive: acts again until it does. */
+async function until(act: () => Promise<unknown>, target: Locator, count: number) {
+  await expect(async () => {
+    await act()
+    await expect(target).toHaveCount(count, { timeout: 500 })
+  }).toPass()
+}
 
 test.describe('the way to the series', () => {
   test('leads from the front page over the projects to one series', async ({ page }) => {
@@ -61,18 +69,21 @@ test.describe('the series of the demonstration', () => {
   })
 
   test('can be narrowed, and the address brings the view back', async ({ page }) => {
-    await page.getByRole('button', { name: '3 to look at' }).click()
-    await expect(page.locator('.multiples a.panel')).toHaveCount(3)
+    const panels = page.locator('.multiples a.panel')
+    await until(() => page.getByRole('button', { name: '3 to look at' }).click(), panels, 3)
     await page.reload()
-    await expect(page.locator('.multiples a.panel')).toHaveCount(3)
-    await page.getByRole('button', { name: 'by lab' }).click()
+    await expect(panels).toHaveCount(3)
+    await until(() => page.getByRole('button', { name: 'by lab' }).click(), page.locator('.multiples .rowhead b'), 2)
     await expect(page).toHaveURL(/show=to-look-at/)
     await expect(page).toHaveURL(/rows=lab/)
   })
 
   test('are found again as they were left after a look at one', async ({ page }) => {
-    await page.getByRole('combobox', { name: 'Labs' }).selectOption('Quaymere')
-    await expect(page.locator('.multiples a.panel')).toHaveCount(20)
+    const labs = page.getByRole('combobox', { name: 'Labs' })
+    await until(async () => {
+      await labs.selectOption('')
+      await labs.selectOption('Quaymere')
+    }, page.locator('.multiples a.panel'), 20)
     await page.getByRole('link', { name: 'iodide, Quaymere, spring' }).first().click()
     await expect(page.getByRole('heading', { name: 'Iodide, NaI' })).toBeVisible()
     await page.getByRole('link', { name: 'All series' }).click()
