@@ -1,7 +1,7 @@
 /** Looks at a whole request before any arithmetic and collects every problem in it. */
 import type { InputProblem } from '../errors'
 import { models } from '../models'
-import { modelNames, weightings, type FitRequest, type ModelName, type ParameterOptions, type Point } from './types'
+import { modelNames, weightings, type FitRequest, type ParameterOptions, type Point } from './types'
 
 /** Beyond these a number is a slip of the unit or of the keyboard. */
 const largestValue = 1e12
@@ -122,8 +122,4 @@ export function collect(run: (report: Report) => void): InputProblem[] {
   const problems: InputProblem[] = []
   run((path, message) => problems.push({ path, message }))
   return problems
-}
-
-export function isModelName(model: FitRequest['model']): model is ModelName {
-  return typeof model === 'string'
 }
