@@ -40,14 +40,15 @@ async function startOwn(session) {
 }
 
 /**
- * The pages to take; the project and the series are the first that the demo lists.
+ * The pages to take; the project is the first that the demo lists, the series one with a reading set aside.
  * @param {import('playwright-core').Browser} browser @param {string} url @returns {Promise<Screen[]>}
  */
 async function screensOf(browser, url) {
   const context = await browser.newContext({ baseURL: url })
   await signIn(context, READER)
-  const project = await firstOf(context, '/api/v1/projects')
-  const series = await firstOf(context, `/api/v1/projects/${project}/series`)
+  const project = await idOf(context, '/api/v1/projects', () => true)
+  const series = await idOf(context, `/api/v1/projects/${project}/series`,
+    ({ salt, readings }) => salt.formula === 'NaSCN' && readings.some(({ setAside }) => setAside))
   await context.close()
   return [
     { name: 'landing', path: '/', isSignedIn: false },
@@ -57,12 +58,18 @@ async function screensOf(browser, url) {
   ]
 }
 
-/** @param {import('playwright-core').BrowserContext} context @param {string} path @returns {Promise<string>} id of the first item */
-async function firstOf(context, path) {
+/** @typedef {{ id: string, salt: { formula: string }, readings: { setAside: boolean }[] }} Listed */
+
+/**
+ * Id of the first item that fits.
+ * @param {import('playwright-core').BrowserContext} context @param {string} path @param {(item: Listed) => boolean} isWanted @returns {Promise<string>}
+ */
+async function idOf(context, path, isWanted) {
   const answer = await context.request.get(path)
-  const { items } = await answer.json()
-  if (!items?.[0]) throw new StopSentence(`${path} lists nothing: the pictures need the demo data.`)
-  return items[0].id
+  const { items } = /** @type {{ items?: Listed[] }} */ (await answer.json())
+  const found = items?.find(isWanted)
+  if (!found) throw new StopSentence(`${path} lists nothing to picture: the pictures need the demo data.`)
+  return found.id
 }
 
 /**

@@ -11,7 +11,8 @@ export const quietChromium = ['--no-sandbox', '--disable-gpu', '--disable-quic',
 /** @param {string} executablePath */
 export async function openBrowser(executablePath) {
   const { chromium } = await import('playwright-core')
-  return chromium.launch({ executablePath, args: quietChromium })
+  // Unhinted, as on a display of today: hinting bends small letters in pictures.
+  return chromium.launch({ executablePath, args: [...quietChromium, '--font-render-hinting=none'] })
 }
 
 /**
