@@ -114,7 +114,8 @@ test.describe('the front page', () => {
   test('gives no constants a table is too short for', async ({ page }) => {
     await openReady(page)
     await page.getByRole('button', { name: 'too few' }).click()
-    await expect(page.getByText('No constants')).toBeVisible()
+    await expect(page.getByText('No constants yet')).toBeVisible()
+    await expect(page.getByRole('heading', { name: '4 constants from 4 readings' })).toBeVisible()
   })
 
   test('loses nothing on a reload and undoes a clearing', async ({ page }) => {
@@ -170,6 +171,18 @@ test.describe('the front page', () => {
       const [file] = await Promise.all([page.waitForEvent('download'), page.getByRole('button', { name: kind, exact: true }).click()])
       expect(file.suggestedFilename()).toBe(`cloud-points.${kind.toLowerCase()}`)
     }
+  })
+
+  test('draws the same figure after another table was shown in between', async ({ page }) => {
+    await openReady(page)
+    const marks = () => page.locator('.plot .chart path').evaluateAll(paths => paths.map(path => path.getAttribute('d')))
+    const first = await marks()
+    await page.getByRole('button', { name: 'too few' }).click()
+    await expect(page.getByText('No constants yet')).toBeVisible()
+    expect((await marks()).length).toBeLessThan(first.length)
+    await page.getByRole('button', { name: 'thiocyanate' }).click()
+    await expect(constant(page, 'K')).toContainText('5.02(44)')
+    expect(await marks()).toEqual(first)
   })
 
   test('copies the constants with the engine version', async ({ page, context }) => {

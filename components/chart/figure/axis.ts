@@ -46,10 +46,13 @@ export function temperatureAxis(ys: readonly number[], clouds: 'on-heating' | 'o
   return axisOver(lowest - below * span, highest + above * span, mostTicks)
 }
 
+/** Below this no thermometer tells residuals apart [K]; a curve through every reading leaves only rounding. */
+const finestLimit = 0.01
+
 /** A residual axis symmetric about zero; `limit` is the dotted line, readings beyond `max` are drawn at the edge. */
 export function residualAxis(residuals: readonly number[]): Axis & { limit: number } {
   const largest = Math.max(0, ...residuals.map(Math.abs))
-  const limit = largest === 0 ? 0.1 : niceStep(largest, 1)
+  const limit = largest === 0 ? 0.1 : Math.max(niceStep(largest, 1), finestLimit)
   const decimals = Math.max(0, -Math.floor(Math.log10(limit) + 1e-9))
   return { min: -1.5 * limit, max: 1.5 * limit, ticks: [-limit, 0, limit], decimals, limit }
 }

@@ -60,7 +60,8 @@ export function figureOption(content: FigureContent, width: number, height: numb
     animation: false,
     series: figureLayers(content, frameOf(content, width, height), palette).map(({ name, shapes }, index) => ({
       type: 'custom', id: name, name, coordinateSystem: 'none', silent: true, z: index + 2, data: [0],
-      renderItem: () => ({ type: 'group', children: shapes.map(toElement) }),
+      // Children are replaced, not merged: a mark of the table before must not stay or bend into another.
+      renderItem: () => ({ type: 'group', $mergeChildren: false, children: shapes.map(toElement) }),
     })),
   }
 }

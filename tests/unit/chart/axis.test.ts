@@ -54,6 +54,10 @@ describe('residualAxis', () => {
     expect(axis.max).toBeGreaterThan(0.05)
   })
 
+  it('does not blow up what is only rounding', () => {
+    expect(residualAxis([1e-15, -3e-16]).limit).toBe(0.01)
+  })
+
   it('has a span without residuals', () => {
     expect(residualAxis([]).max).toBeGreaterThan(0)
   })
