@@ -1,7 +1,6 @@
 import { sql } from 'drizzle-orm'
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { Pool } from 'pg'
-import { logger } from '../utils/logger'
 import * as schema from './schema'
 
 /** A transaction in which it is settled who asks. Services take one; none of them opens its own connection. */
@@ -13,10 +12,17 @@ export type SystemReason = 'sign-in' | 'session' | 'job' | 'rate-limit' | 'readi
 /** Connections of one process; PostgreSQL's own default allows 100 in all. */
 const mostConnections = 10
 
+let reportLost: (error: Error) => void = () => {}
+
+/** Says where the loss of an idle connection is written down. */
+export function onLostConnection(report: (error: Error) => void) {
+  reportLost = report
+}
+
 function connect(connectionString: string | undefined) {
   const pool = new Pool({ connectionString, max: mostConnections })
   // An idle connection may die with the database server: unheard, that would end the process; the next query opens a fresh one.
-  pool.on('error', error => logger().warn({ err: error }, 'an idle database connection was lost'))
+  pool.on('error', error => reportLost(error))
   return { pool, database: drizzle(pool, { schema }) }
 }
 

@@ -1,9 +1,9 @@
 /** The worker process: takes jobs from the queue until it is asked to stop, then hands back what it holds. */
 import PgBoss from 'pg-boss'
-import { closeDatabase } from '../database/client'
+import { closeDatabase, onLostConnection } from '../database/client'
 import { jobKinds } from '../database/schema/jobs'
 import { config } from '../utils/config'
-import { logger } from '../utils/logger'
+import { logger, reportLostConnection } from '../utils/logger'
 import { stopping } from '../utils/stopping'
 import { carryOut, JobInterrupted } from './carry-out'
 import type { QueuedJob } from './queue'
@@ -11,6 +11,7 @@ import { queueSchema } from './queue-name'
 
 const patience = 10_000
 
+onLostConnection(reportLostConnection)
 const boss = new PgBoss({ connectionString: config().DATABASE_URL, schema: queueSchema, migrate: false, schedule: false, max: 4 })
 boss.on('error', error => logger().error({ err: error }, 'queue'))
 await boss.start()

@@ -1,11 +1,13 @@
 import { defineNitroPlugin, sessionHooks } from '#imports'
 import { createError } from 'h3'
-import { closeDatabase } from '~~/server/database/client'
+import { closeDatabase, onLostConnection } from '~~/server/database/client'
 import { sessionPerson } from '~~/server/services/sessions'
 import { closeFitPool, warmFitPool } from '~~/server/services/fit-pool'
+import { reportLostConnection } from '~~/server/utils/logger'
 
 /** Starts the threads for fits, and ends what is open when the process is asked to stop. */
 export default defineNitroPlugin((app) => {
+  onLostConnection(reportLostConnection)
   warmFitPool()
   app.hooks.hook('close', async () => {
     await closeFitPool()

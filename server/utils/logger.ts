@@ -13,3 +13,8 @@ export function logger(): pino.Logger {
   })
   return root
 }
+
+/** Writes down that the database server closed an idle connection; the next query opens a fresh one. */
+export function reportLostConnection(error: Error) {
+  logger().warn({ err: error }, 'an idle database connection was lost')
+}
