@@ -8,6 +8,8 @@ import { build } from 'esbuild'
 
 const root = fileURLToPath(new URL('..', import.meta.url))
 const series = join(root, 'tests/bench/series.json')
+// Debian's own interpreter, whatever else is on the path: its python3-scipy is what the goals were set against.
+const python = '/usr/bin/python3'
 
 /**
  * @param {string} command
@@ -37,7 +39,7 @@ async function measureEngine() {
 }
 
 function hasScipy() {
-  return spawnSync('python3', ['-c', 'import scipy.optimize']).status === 0
+  return spawnSync(python, ['-c', 'import scipy.optimize']).status === 0
 }
 
 /** @param {(string | number)[][]} rows */
@@ -51,7 +53,7 @@ function printTable(rows) {
 const microseconds = (/** @type {number} */ value) => `${value.toFixed(1)} µs`
 
 const engine = await measureEngine()
-const scipy = hasScipy() ? measure('python3', [join(root, 'tests/bench/reference.py'), series]) : null
+const scipy = hasScipy() ? measure(python, [join(root, 'tests/bench/reference.py'), series]) : null
 if (!scipy) console.log('scipy is missing, so there are no ratios; install it with: sudo apt-get install -y python3-scipy')
 
 const ratio = (/** @type {'near' | 'default'} */ reference) => scipy ? `${(scipy[reference] / engine.core).toFixed(1)} ×` : 'no scipy'
