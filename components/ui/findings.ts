@@ -1,3 +1,4 @@
+import type { Support } from '#shared/science/fitting'
 import type { FitResult } from '#shared/science/fitting/types'
 import { concise, fixed, plain } from '#shared/science/notation'
 import type { MarginNoteText } from './marginNoteText'
@@ -17,6 +18,20 @@ export function bindingFinding(binding: FitResult, line: FitResult): MarginNoteT
     sentences: [`A straight line misses by up to ${plain(miss, 2)} K; the binding term improves AICc by ${fixed(line.aicc - binding.aicc, 0)}.`],
     tag: 'holds',
   }
+}
+
+/** How a binding term stands beside the straight line that is shown; null where it clearly stands, or nothing can be said. */
+export function straightLineFinding({ verdict, deltaAicc, probability, detectable }: Support): MarginNoteText | null {
+  if (verdict === 'undecided') {
+    return {
+      heading: 'Binding is not settled',
+      sentences: [`A binding term improves AICc by ${fixed(deltaAicc!, 1)}, with a probability of ${plain(probability!, 1)} on a true straight line: too little to quote *K*, too much to rule it out.`],
+      tag: 'not-settled',
+    }
+  }
+  if (verdict !== 'no-evidence') return null
+  const seen = detectable ? ` A *B*~max~ above about ${plain(detectable.bmax, 2)} K, at *K* = ${plain(detectable.k, 2)} M^−1^, would have shown.` : ''
+  return { heading: 'A straight line is enough', sentences: [`A binding term does not improve AICc.${seen}`], tag: 'holds' }
 }
 
 function correlationBetween(fit: FitResult, first: string, second: string): number | null {

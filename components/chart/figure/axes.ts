@@ -50,15 +50,15 @@ function concentrationTicks(frame: Frame, palette: Palette): Shape[] {
 export function axisShapes(frame: Frame, palette: Palette): Shape[] {
   return [
     ...hairlines(frame.main, palette),
-    ...hairlines(frame.residual, palette),
     ...verticalTicks(frame.yAxis, frame.main, frame.y, palette),
-    ...verticalTicks(frame.residualAxis, frame.residual, frame.r, palette),
+    ...(frame.hasResiduals ? [...hairlines(frame.residual, palette), ...verticalTicks(frame.residualAxis, frame.residual, frame.r, palette)] : []),
     ...concentrationTicks(frame, palette),
   ]
 }
 
 /** Names of the axes stand above and at the right end, horizontal, quantity in italics over its unit. */
 export function axisNames(frame: Frame, palette: Palette): Shape[] {
+  const residualName: Shape = { kind: 'text', runs: plainText('residual / K'), size: 12, fill: palette.ink2, x: frame.main.left + frame.main.width, y: frame.residual.top - 4, align: 'right', halo: palette.paper }
   const right = frame.main.left + frame.main.width
   const foot = frame.residual.top + frame.residual.height
   const common = { kind: 'text', size: 12.5, fill: palette.ink } as const
@@ -66,6 +66,6 @@ export function axisNames(frame: Frame, palette: Palette): Shape[] {
     { ...common, runs: plainText('T'), x: 0, y: 10, align: 'left', isItalic: true },
     { ...common, runs: [{ text: 'cp', place: 'sub' }, { text: ' / °C' }], x: 8, y: 10, align: 'left' },
     { ...common, runs: [{ text: 'salt concentration [M] / mol L' }, { text: '−1', place: 'sup' }], x: right, y: foot + 33, align: 'right' },
-    { ...common, runs: plainText('residual / K'), size: 12, fill: palette.ink2, x: right, y: frame.residual.top - 4, align: 'right', halo: palette.paper },
+    ...(frame.hasResiduals ? [residualName] : []),
   ]
 }

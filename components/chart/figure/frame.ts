@@ -14,6 +14,8 @@ export interface Frame {
   height: number
   main: Rectangle
   residual: Rectangle
+  /** false: no curve, and so no strip of residuals */
+  hasResiduals: boolean
   xAxis: Axis
   yAxis: Axis
   residualAxis: Axis & { limit: number }
@@ -71,16 +73,18 @@ function within(values: readonly number[], readings: readonly number[]): number[
 
 /** Lays a figure out in a given size. */
 export function frameOf(content: FigureContent, width: number, height: number): Frame {
-  const mainHeight = height - margins.top - strip.gap - strip.height - margins.bottom
+  // Without a curve there is nothing to be left over from: the strip gives its place to the readings.
+  const { gap, height: stripHeight } = content.curve ? strip : { gap: 0, height: 0 }
+  const mainHeight = height - margins.top - gap - stripHeight - margins.bottom
   const plotWidth = Math.max(width - margins.left - margins.right, 80)
   const main = { left: margins.left, top: margins.top, width: plotWidth, height: Math.max(mainHeight, 80) }
-  const residual = { left: main.left, top: main.top + main.height + strip.gap, width: plotWidth, height: strip.height }
+  const residual = { left: main.left, top: main.top + main.height + gap, width: plotWidth, height: stripHeight }
   const fitted = residualsOf(content).filter(({ reading }) => !reading.setAside).map(({ residual }) => residual)
   const xAxis = concentrationAxis([...content.readings, ...content.gaps].map(({ x }) => x), width < narrow ? 5 : 6)
   const yAxis = temperatureAxis(temperatures(content), content.clouds, width < narrow ? 5 : 6)
   const rAxis = residualAxis(fitted)
   return {
-    width, height, main, residual, xAxis, yAxis, residualAxis: rAxis,
+    width, height, main, residual, hasResiduals: content.curve !== null, xAxis, yAxis, residualAxis: rAxis,
     x: scale(xAxis, main.left, main.left + main.width),
     y: scale(yAxis, main.top + main.height, main.top),
     r: scale(rAxis, residual.top + residual.height, residual.top),

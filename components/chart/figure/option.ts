@@ -27,6 +27,7 @@ function stippleShapes(content: FigureContent, frame: Frame, palette: Palette, b
 }
 
 function residualRules(frame: Frame, palette: Palette): Shape[] {
+  if (!frame.hasResiduals) return []
   const { left, width } = frame.residual
   const { limit } = frame.residualAxis
   const rule = (value: number, dash?: number[]) => line(left, frame.r(value), left + width, frame.r(value), palette.rule, 1, dash)

@@ -1,8 +1,9 @@
 import type { Series } from '#shared/contracts/series'
 import { influenceOn, type Influence } from '#shared/science/diagnostics/influence'
 import { ScienceError } from '#shared/science/errors'
-import { curveAt, fit, type FitResult } from '#shared/science/fitting'
+import { curveAt, fit, supportOf, type FitRequest, type FitResult } from '#shared/science/fitting'
 import { fixed, plain } from '#shared/science/notation'
+import { bindingFinding, straightLineFinding } from '~~/components/ui/findings'
 import type { MarginNoteText } from '~~/components/ui/marginNoteText'
 import { noteSentences } from '~~/components/ui/noteSentences'
 import { quantitySymbol, unitMarkup } from '~~/components/ui/quantityNames'
@@ -18,8 +19,13 @@ export interface KeyedNote {
 
 function fitWith(series: Series, reading: SeriesReading): FitResult | null {
   const request = fitRequest(series, series.readings.filter(other => other === reading || usedReadings(series).includes(other)))
+  return request && fitOrNone(request)
+}
+
+/** A fit, or nothing where the readings are too few for it. */
+function fitOrNone(request: FitRequest): FitResult | null {
   try {
-    return request && fit(request)
+    return fit(request)
   }
   catch (error) {
     if (error instanceof ScienceError) return null
@@ -52,6 +58,16 @@ function setAsideNotes(series: Series): KeyedNote[] {
       note: { heading: 'One reading is set aside', sentences: [place + (distance === null ? '' : consequence(series, fitWith(series, reading)))] },
     }
   })
+}
+
+/** Whether the readings ask for a binding term, for the two forms that the verdict is about. */
+function bindingNotes(series: Series): KeyedNote[] {
+  const request = fitRequest(series)
+  if (request?.model !== 'linear' && request?.model !== 'linear-langmuir') return []
+  const [line, binding] = (['linear', 'linear-langmuir'] as const).map(model => fitOrNone({ ...request, model }))
+  if (!line || !binding) return []
+  const note = request.model === 'linear' ? straightLineFinding(supportOf(request, line, binding)) : bindingFinding(binding, line)
+  return note ? [{ note }] : []
 }
 
 function formNote({ support, fit: current }: Series): KeyedNote[] {
@@ -103,5 +119,5 @@ export function influencesOf(series: Series): Influence[] {
 export function seriesNotes(series: Series, influences: readonly Influence[]): KeyedNote[] {
   const used = usedReadings(series)
   const engine = (series.fit?.notes ?? []).map(note => ({ note: noteSentences(note, place => `reading ${used[place - 1]?.number ?? place}`) }))
-  return [...emptyNote(series), ...setAsideNotes(series), ...engine, ...formNote(series), ...influenceNote(series, influences)]
+  return [...emptyNote(series), ...setAsideNotes(series), ...bindingNotes(series), ...engine, ...formNote(series), ...influenceNote(series, influences)]
 }

@@ -104,6 +104,13 @@ describe('figureLayers', () => {
     expect(shapes('readings').length).toBeGreaterThan(0)
     expect([...shapes('curve'), ...shapes('stipple'), ...shapes('residuals')]).toEqual([])
   })
+
+  it('gives the place of the residuals to the readings when there is no curve', () => {
+    const { frame, shapes } = layersOf({ fit: null })
+    expect(frame.main.height).toBeGreaterThan(layersOf({}).frame.main.height)
+    expect(shapes('residual rules')).toEqual([])
+    expect(texts(shapes('axis names')).join()).not.toContain('residual')
+  })
 })
 
 describe('the axes', () => {

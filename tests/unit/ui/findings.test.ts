@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { fit } from '#shared/science/fitting'
 import type { Point } from '#shared/science/fitting/types'
 import { examples } from '~~/composables/sheet/examples'
-import { bindingFinding, tradeOffFinding } from '~~/components/ui/findings'
+import { bindingFinding, straightLineFinding, tradeOffFinding } from '~~/components/ui/findings'
 
 function pointsOf(name: string): Point[] {
   return examples.find(example => example.name === name)!.rows.map(([x, y]) => ({ x: Number(x), y: Number(y) }))
@@ -20,6 +20,27 @@ describe('bindingFinding', () => {
 
   it('says nothing about readings on a line', () => {
     expect(bindingFinding(fit({ model: 'linear-langmuir', points: sulfate }), fit({ model: 'linear', points: sulfate }))).toBeNull()
+  })
+})
+
+describe('straightLineFinding', () => {
+  const line = { deltaAicc: -3.2, probability: 0.4, detectable: { bmax: 0.31, k: 5 } }
+
+  it('says how large a binding would have been seen where there is no evidence of one', () => {
+    const note = straightLineFinding({ verdict: 'no-evidence', ...line })
+    expect(note).toMatchObject({ heading: 'A straight line is enough', tag: 'holds' })
+    expect(note?.sentences[0]).toContain('above about 0.31 K, at *K* = 5')
+  })
+
+  it('keeps open what the readings do not decide, with both numbers', () => {
+    const note = straightLineFinding({ verdict: 'undecided', deltaAicc: 2.9, probability: 0.03, detectable: null })
+    expect(note).toMatchObject({ heading: 'Binding is not settled', tag: 'not-settled' })
+    expect(note?.sentences[0]).toMatch(/AICc by 2\.9, with a probability of 0\.03/)
+  })
+
+  it('is silent where binding stands or the readings are too few for a verdict', () => {
+    expect(straightLineFinding({ verdict: 'supported', ...line })).toBeNull()
+    expect(straightLineFinding({ verdict: null, deltaAicc: null, probability: null, detectable: null })).toBeNull()
   })
 })
 
