@@ -53,6 +53,8 @@ export default defineNuxtConfig({
     rateLimiter: false,
     removeLoggers: false,
     headers: {
+      // Other names of the same domain, and the browsers' lists, are for whoever runs it to decide.
+      strictTransportSecurity: { maxAge: 31_536_000, includeSubdomains: false, preload: false },
       contentSecurityPolicy: {
         'default-src': ['\'none\''],
         'script-src': ['\'self\'', '\'strict-dynamic\'', '\'nonce-{{nonce}}\''],

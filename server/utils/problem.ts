@@ -4,6 +4,7 @@ import { v7 } from 'uuid'
 import type { Problem } from '#shared/contracts/problem'
 import { ScienceError } from '#shared/science/errors'
 import { ServiceError, refusals, type Refusal } from '~~/server/services/errors'
+import { isOutage } from './outage'
 import { logger } from './logger'
 
 /** More faults than anybody reads; the rest is counted. */
@@ -18,6 +19,10 @@ const sentences: Partial<Record<Refusal, string>> = {
   'wrong-method': 'This address exists but does not take this method; /api/v1/openapi.json lists what it takes.',
 }
 
+const outageSentence = 'The database does not answer right now; try again in a few seconds.'
+/** Seconds; a restart of the database takes about that long. */
+const outageWait = 5
+
 /** Any error as RFC 9457 problem details; what is not a refusal becomes a 500 with a reference and no internals. */
 export function problemOf(error: unknown): { problem: Problem, retryAfter?: number } {
   if (error instanceof ServiceError) return { problem: refusal(error.code, error.message, error.faults), retryAfter: error.retryAfter }
@@ -26,6 +31,7 @@ export function problemOf(error: unknown): { problem: Problem, retryAfter?: numb
   }
   const code = isError(error) && !error.unhandled ? codeOfStatus[error.statusCode] : undefined
   if (code) return { problem: refusal(code, sentences[code] ?? refusals[code].title + '.', []) }
+  if (isOutage(rootOf(error))) return { problem: refusal('unavailable', outageSentence, []), retryAfter: outageWait }
   return { problem: fault() }
 }
 
@@ -37,7 +43,7 @@ export function countSentence(count: number): string {
 /** Answers with the problem and logs it when the fault is ours. */
 export function sendProblem(event: H3Event, error: unknown) {
   const { problem, retryAfter } = problemOf(error)
-  if (problem.reference) {
+  if (problem.status >= 500 && !(error instanceof ServiceError)) {
     logger().error({ requestId: event.context.requestId, reference: problem.reference, err: rootOf(error) }, 'request failed')
   }
   if (retryAfter !== undefined) setResponseHeader(event, 'retry-after', Math.ceil(retryAfter))
