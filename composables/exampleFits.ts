@@ -1,4 +1,4 @@
-import type { TableFits } from './useFit'
+import type { TableFits } from './tableFits'
 import { checkSheet } from './sheet/check'
 import { exampleRows, examples } from './sheet/examples'
 

@@ -1,12 +1,7 @@
 import { FetchError } from 'ofetch'
 import type { Problem } from '#shared/contracts/problem'
 import type { FitResult, Point } from '#shared/science/fitting/types'
-
-/** The two fits of a table: with binding, and the straight line alone; null where the readings are too few for one. */
-export interface TableFits {
-  binding: FitResult | null
-  line: FitResult | null
-}
+import type { TableFits } from './tableFits'
 
 /** One sentence about the table as it was sent; index is the reading's place in what was sent. */
 export interface Refusal {

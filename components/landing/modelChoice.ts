@@ -1,5 +1,5 @@
 import type { FitNote, FitResult, NoteCode } from '#shared/science/fitting/types'
-import type { TableFits } from '~~/composables/useFit'
+import type { TableFits } from '~~/composables/tableFits'
 
 /** Which of the two fits the page shows, and what is said of it. */
 export interface ModelChoice {

@@ -121,12 +121,19 @@ export function descendFrom(objective: Objective, start: Float64Array, bounds: B
     if (sum === 0 || (gain < 1e-10 && change < nearlyStationary)) {
       const settled = settle(objective, point, bounds)
       if (settled.stationary && settled.stationary.relativeOffset < convergedOffset) return settled
+      if (!Number.isFinite(settled.sum)) break
       point.set(settled.point)
       sum = settled.sum
       objective.residuals(point, residuals)
     }
   }
-  return settle(objective, point, bounds)
+  const settled = settle(objective, point, bounds)
+  return Number.isFinite(settled.sum) ? settled : unfinished(point, sum)
+}
+
+/** The last point that was accepted: the objective gives no more numbers (its budget is spent), so nothing is said about its surroundings. */
+function unfinished(point: Float64Array, sum: number): Descent {
+  return { point, sum, stationary: null, inside: Array.from(point.keys()), stopReason: 'limit' }
 }
 
 function landing(objective: Objective, point: Float64Array, inside: number[], moved: Float64Array, bounds: Bounds) {

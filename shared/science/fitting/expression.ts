@@ -7,7 +7,7 @@ import { seededRandom } from '../random'
 import { checkCounts, checkOptions, checkReadings, collect } from './check'
 import { descend, type Bounds, type Descent } from './descend'
 import { descendInLogarithms } from './logarithmic'
-import type { Objective } from './objective'
+import { sumOfSquares, type Objective } from './objective'
 import { withNotes } from './fit'
 import { analyse, type Analysis } from './result'
 import type { Solution } from './solve'
@@ -15,7 +15,7 @@ import type { ExpressionModel, FitRequest, FitResult, ParameterOptions, Point } 
 import { weightsOf } from './weights'
 
 /** Elementary operations for the search, and again for the intervals: well under a second each on a quiet machine. */
-const operationBudget = 8e7
+const operationBudget = 5e7
 const iterationLimit = 3_000
 /** Starts that nobody chose get less patience. */
 const trialIterationLimit = 300
@@ -114,21 +114,19 @@ function solveExpression(compiled: Compiled, data: ExpressionData, options: Opti
   const upper = Float64Array.from(compiled.parameters, name => options[name]!.max ?? Infinity)
   const bounds: Bounds = { lower: Float64Array.from(free, j => lower[j]!), upper: Float64Array.from(free, j => upper[j]!) }
   const given = Float64Array.from(free, j => options[compiled.parameters[j]!]!.start)
-  refuseUndefinedStart(objective.residuals, given, data)
-  let best: Descent | null = null
+  let best = startingPoint(objective, given, data)
   for (const start of [given, ...startsInside(given, bounds)]) {
     const found = start === given ? descendPatiently(objective, start, bounds) : descend(objective, start, bounds, trialIterationLimit)
-    if (Number.isFinite(found.sum) && (!best || found.sum < best.sum * (1 - 1e-12))) best = found
+    if (Number.isFinite(found.sum) && (best.isStart || found.sum < best.sum * (1 - 1e-12))) best = { ...found, isStart: false }
     if (budget.left < 0) break
   }
-  const chosen = best ?? { point: given, sum: Infinity, stationary: null, inside: [], stopReason: 'limit' as const }
   const values = held.slice()
-  free.forEach((j, at) => (values[j] = chosen.point[at]!))
+  free.forEach((j, at) => (values[j] = best.point[at]!))
   const model = expressionAsModel(compiled, data)
   return {
     problem: { model, held, lower, upper, data: { n: data.y.length, x: data.y.map((_, i) => i), y: data.y, root: data.root, xScale: 1, yScale: 1, yOffset: 0, sumScale: heaviest } },
-    estimated: model, values, objective, sum: chosen.sum, end: null, stopReason: chosen.stopReason,
-    columns: chosen.inside.map(at => free[at]!), stationary: chosen.stationary,
+    estimated: model, values, objective, sum: best.sum, end: null, stopReason: best.stopReason,
+    columns: best.inside.map(at => free[at]!), stationary: best.stationary,
   }
 }
 
@@ -142,11 +140,12 @@ function descendPatiently(objective: Objective, start: Float64Array, bounds: Bou
   return again.sum < found.sum ? again : found
 }
 
-function refuseUndefinedStart(residuals: (point: Float64Array, out: Float64Array) => void, start: Float64Array, data: ExpressionData): void {
+/** The given start as a place to fall back on. @throws ScienceError where the expression is not a finite number there */
+function startingPoint(objective: Objective, start: Float64Array, data: ExpressionData): Descent & { isStart: boolean } {
   const out = new Float64Array(data.y.length)
-  residuals(start, out)
+  objective.residuals(start, out)
   const bad = out.findIndex(value => !Number.isFinite(value))
-  if (bad < 0) return
+  if (bad < 0) return { point: start, sum: sumOfSquares(out), stationary: null, inside: Array.from(start.keys()), stopReason: 'limit', isStart: true }
   const at = data.predictors.map(column => column[bad]).join(', ')
   const problem: InputProblem = { path: 'model.parameters', message: `at the starts the expression is not a finite number for point ${bad + 1} (${at}); choose other starts` }
   throw new ScienceError('unusable-input', [problem])

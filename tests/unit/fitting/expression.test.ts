@@ -128,6 +128,17 @@ describe('fitExpression, given an expression that is not plain arithmetic', () =
 })
 
 describe('fitExpression, given work without end', () => {
+  it('gives the best point it reached when its operations run out in the middle of a descent', () => {
+    const points = Array.from({ length: 5_000 }, (_, i) => ({ x: i / 5_000, y: Math.sin(i) }))
+    const expression = `a*${'sin('.repeat(20)}b*x${')'.repeat(20)}`
+    const bounded = { a: { start: 1, min: -9, max: 9 }, b: { start: 1, min: -900, max: 900 } }
+    const result = fitExpression({ model: { expression, variable: 'x', parameters: bounded }, points })
+    expect(result.stopReason).toBe('limit')
+    expect(result.residualSumOfSquares).toBeLessThan(points.reduce((sum, { x, y }) => sum + (y - Math.sin(x)) ** 2, 0))
+    expect(result.notes.map(({ code }) => code)).toContain('not-converged')
+    expect(result.notes.map(({ code }) => code)).not.toContain('parameter-at-bound')
+  })
+
   it('stops at its limit and says so, in bounded time', () => {
     const points = Array.from({ length: 5_000 }, (_, i) => ({ x: i / 5_000, y: Math.sin(i * i) }))
     const names = ['a', 'b', 'c', 'd', 'f', 'g', 'h', 'k']
