@@ -8,7 +8,7 @@ import { examples } from '~~/composables/sheet/examples'
 export interface HeroPicture {
   width: number
   height: number
-  layers: { width: number, path: string }[]
+  layers: { diameter: number, path: string }[]
   band: string
   curve: string
   marks: string[]
@@ -58,7 +58,7 @@ export function heroPicture(width: number, height: number): HeroPicture {
   })
   return {
     width, height, words,
-    layers: dots.map(layer => ({ width: 2 * layer.radius, path: dotsPath(layer.dots) })),
+    layers: dots.map(layer => ({ diameter: Number((2 * layer.radius).toFixed(1)), path: dotsPath(layer.dots) })),
     band: `${polyline([...at(bandHalfWidth), ...at(-bandHalfWidth).reverse()])}Z`,
     curve: polyline(at(0)),
     marks: examples[0].rows.map(([x, y]) => [Number(x), Number(y)] as const).filter(([x]) => x > 0)
