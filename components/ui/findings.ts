@@ -23,11 +23,11 @@ export function bindingFinding(binding: FitResult, line: FitResult): MarginNoteT
 /** How a binding term stands beside the straight line that is shown; null where it clearly stands, or nothing can be said. */
 export function straightLineFinding({ verdict, deltaAicc, probability, detectable }: Support): MarginNoteText | null {
   if (verdict === 'undecided') {
-    return {
-      heading: 'Binding is not settled',
-      sentences: [`A binding term improves AICc by ${fixed(deltaAicc!, 1)}, with a probability of ${plain(probability!, 1)} on a true straight line: too little to quote *K*, too much to rule it out.`],
-      tag: 'not-settled',
-    }
+    const chance = `on a true straight line a bend like this has a probability of ${plain(probability!, 1)}`
+    const sentence = deltaAicc! > 0
+      ? `A binding term improves AICc by ${fixed(deltaAicc!, 1)}, and ${chance}: too little to quote *K*, too much to rule it out.`
+      : `These readings are too few for AICc to tell a curve from a line, but ${chance}.`
+    return { heading: 'Binding is not settled', sentences: [sentence], tag: 'not-settled' }
   }
   if (verdict !== 'no-evidence') return null
   const seen = detectable ? ` A *B*~max~ above about ${plain(detectable.bmax, 2)} K, at *K* = ${plain(detectable.k, 2)} M^−1^, would have shown.` : ''

@@ -34,6 +34,9 @@ export interface CheckedSheet {
 /** Cloud points of aqueous solutions lie in here [°C]; common practice, wide on both sides. */
 const plausible = { lowest: -20, highest: 150 } as const
 
+/** Cloud points written in kelvin; outside the plausible range in °C on purpose. */
+const kelvin = { zero: 273.15, lowest: 263, highest: 400 } as const
+
 export function emptyRow(): SheetRow {
   return { x: '', y: '', sd: '' }
 }
@@ -42,10 +45,21 @@ function badNumber(text: string, row: number): string {
   return `Row ${row}: “${text.trim()}” is not a number.`
 }
 
-function outOfRange(column: Column, value: number, row: number): { finding: string, suggestion: string | null } | null {
+function isKelvinLike(value: number): boolean {
+  return value >= kelvin.lowest && value <= kelvin.highest
+}
+
+/** One such value is a slip of the decimal point; a whole column of them is another unit. */
+function isColumnInKelvin(rows: readonly SheetRow[]): boolean {
+  const values = rows.map(({ y }) => readCell(y)).filter(cell => cell.kind === 'number').map(({ value }) => value)
+  return values.length > 1 && values.every(isKelvinLike)
+}
+
+function outOfRange(column: Column, value: number, row: number, isInKelvin: boolean): { finding: string, suggestion: string | null } | null {
   if (column === 'x' && value < 0) return { finding: `Row ${row}: a concentration cannot be negative.`, suggestion: String(-value) }
   if (column === 'sd' && value < 0) return { finding: `Row ${row}: a standard uncertainty cannot be negative.`, suggestion: String(-value) }
   if (column !== 'y' || (value >= plausible.lowest && value <= plausible.highest)) return null
+  if (isInKelvin) return { finding: `Row ${row}: ${value} looks like kelvin; the sheet counts in °C.`, suggestion: String(Number((value - kelvin.zero).toFixed(4))) }
   const shifted = [10, 100, 1000].map(factor => value / factor).find(tenth => tenth >= 1 && tenth <= 100)
   return {
     finding: `Row ${row}: ${value} °C is outside ${plausible.lowest} to ${plausible.highest} °C. Is a decimal point missing?`.replace('-', '−'),
@@ -53,23 +67,24 @@ function outOfRange(column: Column, value: number, row: number): { finding: stri
   }
 }
 
-function checkCell(text: string, column: Column, row: number): CellProblem | number | null {
+function checkCell(text: string, column: Column, row: number, isInKelvin: boolean): CellProblem | number | null {
   const cell = readCell(text)
   if (cell.kind === 'empty') return null
   if (cell.kind === 'bad') return { row, column, finding: badNumber(text, row), suggestion: cell.suggestion }
-  const problem = outOfRange(column, cell.value, row)
+  const problem = outOfRange(column, cell.value, row, isInKelvin)
   return problem ? { row, column, ...problem } : cell.value
 }
 
 /** Reads a whole sheet: what can be fitted, and every problem at once. Empty rows and unfinished ones are no problem. */
 export function checkSheet(rows: readonly SheetRow[], hasUncertainty: boolean): CheckedSheet {
   const checked: CheckedSheet = { readings: [], problems: [], filled: 0, gaps: [] }
+  const isInKelvin = isColumnInKelvin(rows)
   rows.forEach((cells, index) => {
     const row = index + 1
     const used = hasUncertainty ? columns : columns.slice(0, 2)
     if (used.every(column => cells[column].trim() === '')) return
     checked.filled += 1
-    const results = new Map(used.map(column => [column, checkCell(cells[column], column, row)]))
+    const results = new Map(used.map(column => [column, checkCell(cells[column], column, row, isInKelvin)]))
     const problems = [...results.values()].filter(result => result !== null && typeof result === 'object')
     checked.problems.push(...problems)
     const [x, y, sd] = [results.get('x'), results.get('y'), results.get('sd')]

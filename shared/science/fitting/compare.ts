@@ -71,7 +71,8 @@ export function supportOf(request: Pick<FitRequest, 'points' | 'weighting' | 'sd
 
 function verdictOf(deltaAicc: number | null, probability: number | null): Verdict | null {
   if (deltaAicc === null || probability === null) return null
-  if (deltaAicc <= 0) return 'no-evidence'
+  // With few readings the correction of AICc alone outweighs any bend; a test that sees one keeps the question open.
+  if (deltaAicc <= 0) return probability < significance ? 'undecided' : 'no-evidence'
   return deltaAicc >= supportedFrom && probability < significance ? 'supported' : 'undecided'
 }
 

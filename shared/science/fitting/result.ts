@@ -48,7 +48,10 @@ export function toResult(analysis: Analysis): FitResult {
   const sum = solution.sum * data.sumScale
   const isAbsolute = weights.sdMeaning === 'absolute'
   const parameters = fittedParameters(analysis)
-  const covariance = originalCovariance(analysis, index => analysis.solution.estimated.parameters[index]!.name)
+  const nameOf = (index: number) => solution.estimated.parameters[index]!.name
+  const covariance = originalCovariance(analysis, nameOf)
+  // From the covariance of unit variance: a perfect fit has none of its own, and the same correlation.
+  const unitCovariance = covariance && originalCovariance({ ...analysis, variance: 1 }, nameOf)
   return {
     model: solution.problem.model.name,
     n: data.n,
@@ -59,7 +62,7 @@ export function toResult(analysis: Analysis): FitResult {
     sdMeaning: weights.sdMeaning,
     parameters,
     covariance,
-    correlation: covariance && correlationOf(covariance),
+    correlation: unitCovariance && correlationOf(unitCovariance),
     residualSumOfSquares: sum,
     residualStandardDeviation: degreesOfFreedom > 0 ? Math.sqrt(sum / degreesOfFreedom) : null,
     ...criteria(sum, data.n, free.length, isAbsolute),

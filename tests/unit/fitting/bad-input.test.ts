@@ -95,6 +95,7 @@ describe('fit, given hard but honest readings', () => {
   it.each<[string, Partial<FitRequest>]>([
     ['all cloud points equal', { points: ladder.map(({ x }) => ({ x, y: 31 })) }],
     ['a perfect line', { points: ladder.map(({ x }) => ({ x, y: 31 - 4 * x })) }],
+    ['a line that leaves exactly nothing over', { model: 'linear', points: [{ x: 0, y: 31 }, { x: 0.1, y: 30.5 }, { x: 0.4, y: 29 }] }],
     ['a perfect curve', { points: ladder.map(({ x }) => ({ x, y: 31 + 8 * x / (1 + 2 * x) })) }],
     ['duplicated points', { points: [...ladder, ...ladder] }],
     ['as many points as parameters', { points: ladder.slice(0, 4) }],

@@ -47,6 +47,11 @@ describe('compareModels', () => {
     expect(compareModels({ points: enough }).verdict).toBe('supported')
   })
 
+  it('keeps the question open where readings too few for AICc bend plainly', () => {
+    const bent = [0, 0.05, 0.12, 0.2, 0.3, 0.5, 1].map((x, i) => ({ x, y: 31 - 4 * x + 20 * x / (1 + 5 * x) + (i % 2 ? 0.02 : -0.02) }))
+    expect(compareModels({ points: bent })).toMatchObject({ verdict: 'undecided' })
+  })
+
   it('leaves out the models the readings are too few for', () => {
     const { models, verdict } = compareModels({ points: line.slice(0, 3) })
     expect(models.map(({ model }) => model)).toEqual(['linear', 'langmuir', 'linear-quadratic'])

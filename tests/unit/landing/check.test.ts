@@ -27,6 +27,13 @@ describe('checkSheet', () => {
     expect(checkSheet(rows(['0', '3181']), false).problems[0]?.suggestion).toBe('31.81')
   })
 
+  it('takes a column of kelvin for kelvin, and one such value for a slip', () => {
+    const { problems } = checkSheet(rows(['0', '304.1'], ['50', '304.7']), false)
+    expect(problems.map(({ suggestion }) => suggestion)).toEqual(['30.95', '31.55'])
+    expect(problems[0]?.finding).toContain('looks like kelvin')
+    expect(checkSheet(rows(['0', '31.2'], ['0.1', '318.6']), false).problems[0]?.suggestion).toBe('31.86')
+  })
+
   it('waits for a row that is not finished', () => {
     const { readings, problems } = checkSheet(rows(['0.3', ''], ['', '31']), false)
     expect([readings, problems]).toEqual([[], []])

@@ -35,7 +35,12 @@ describe('straightLineFinding', () => {
   it('keeps open what the readings do not decide, with both numbers', () => {
     const note = straightLineFinding({ verdict: 'undecided', deltaAicc: 2.9, probability: 0.03, detectable: null })
     expect(note).toMatchObject({ heading: 'Binding is not settled', tag: 'not-settled' })
-    expect(note?.sentences[0]).toMatch(/AICc by 2\.9, with a probability of 0\.03/)
+    expect(note?.sentences[0]).toMatch(/AICc by 2\.9, and on a true straight line a bend like this has a probability of 0\.03/)
+  })
+
+  it('does not call a worse AICc an improvement', () => {
+    const note = straightLineFinding({ verdict: 'undecided', deltaAicc: -30, probability: 0.002, detectable: null })
+    expect(note?.sentences[0]).toMatch(/^These readings are too few for AICc .* probability of 0\.002/)
   })
 
   it('is silent where binding stands or the readings are too few for a verdict', () => {
