@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { id, instant, named } from './common'
-import { fitResultContract, fittedParameterContract, derivedContract, noteContract } from './fit'
+import { modelNames } from '#shared/science/fitting/types'
+import { derivedContract, fitRequestContract, fitResultContract, fittedParameterContract, noteContract } from './fit'
 
 export const seriesParams = z.object({ series: id })
 export const readingLimits = ['exact', 'below', 'above', 'salt-precipitated'] as const
@@ -56,6 +57,9 @@ export const seriesSummaryContract = z.object({
 })
 export type SeriesSummary = z.infer<typeof seriesSummaryContract>
 
+export const changeReasons = ['typing-error', 're-measured', 'other'] as const
+export const directions = ['heating', 'cooling'] as const
+
 export const readingContract = z.object({
   id,
   number: z.number().int().describe('place in the table, from 1'),
@@ -64,11 +68,17 @@ export const readingContract = z.object({
   sd: z.number().nullable().describe('standard uncertainty of y, K'),
   n: z.number().int().nullable().describe('independent samples'),
   batch: z.object({ id, label: z.string() }).nullable(),
-  direction: z.enum(['heating', 'cooling']),
+  direction: z.enum(directions),
   limit: z.enum(readingLimits),
   blank: z.boolean(),
   note: z.string().nullable(),
   setAside: z.object({ reason: z.string(), by: z.string(), at: instant }).nullable(),
+  entersFit: z.boolean().describe('exact, not set aside, and measured in the direction in which the campaign clouds'),
+  changed: z.object({
+    x: z.number(), y: z.number(), sd: z.number().nullable(), n: z.number().int().nullable(),
+    reason: z.enum(changeReasons), words: z.string().nullable(),
+  }).nullable().describe('the values before the last correction, and why it was made'),
+  origin: z.string().describe('where the value comes from, in words: typed, or file and row'),
 })
 
 export const revisionContract = z.object({
@@ -86,6 +96,12 @@ export const supportContract = z.object({
   deltaAicc: z.number().nullable().describe('AICc above the best model'),
 })
 
+export const fitChoiceContract = z.strictObject({
+  model: z.enum(modelNames).nullable().describe('null: the form that the readings support'),
+  options: fitRequestContract.pick({ parameters: true, weighting: true, sdMeaning: true, confidence: true, intervals: true }),
+})
+export type FitChoice = z.infer<typeof fitChoiceContract>
+
 export const seriesContract = z.object({
   id,
   project: named,
@@ -93,7 +109,12 @@ export const seriesContract = z.object({
   campaign: campaignSummaryContract.extend({
     conditions: z.string().describe('sample, concentration, direction and rate in a sentence'),
   }),
+  canEdit: z.boolean(),
   revision: z.number().int().nullable(),
+  choice: fitChoiceContract.nullable().describe('how this revision asks to be fitted; null: the form its readings support'),
+  batches: z.array(z.object({
+    id, label: z.string(), measuredOn: z.iso.date().nullable(), revision: z.number().int().nullable().describe('of the blanks'), usedBy: z.number().int().describe('series of the batch'),
+  })),
   readings: z.array(readingContract),
   fit: fitResultContract.extend({ id }).nullable(),
   support: z.object({

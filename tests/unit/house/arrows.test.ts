@@ -3,23 +3,23 @@ import { importedPath, importsOf, projectFiles, textOf } from './sources'
 
 /** Which rooms each room may import from; what a room does not name it may not enter. */
 const arrows: Record<string, readonly string[]> = {
-  'pages': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science'],
-  'layouts': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science'],
+  'pages': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'layouts': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science', 'shared/tables'],
   'middleware': ['composables', 'stores', 'shared/contracts'],
   'plugins': ['composables', 'stores', 'shared/contracts'],
-  'components': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science'],
-  'composables': ['composables', 'stores', 'shared/contracts', 'shared/science'],
-  'stores': ['stores', 'shared/contracts', 'shared/science'],
+  'components': ['components', 'composables', 'stores', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'composables': ['composables', 'stores', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'stores': ['stores', 'shared/contracts', 'shared/science', 'shared/tables'],
   'shared/science': ['shared/science'],
-  'shared/contracts': ['shared/contracts', 'shared/science'],
-  'server/api': ['server/services', 'server/utils', 'shared/contracts', 'shared/science'],
-  'server/plugins': ['server/services', 'server/utils', 'server/jobs', 'server/database', 'shared/contracts', 'shared/science'],
+  'shared/contracts': ['shared/contracts', 'shared/science', 'shared/tables'],
+  'server/api': ['server/services', 'server/utils', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'server/plugins': ['server/services', 'server/utils', 'server/jobs', 'server/database', 'shared/contracts', 'shared/science', 'shared/tables'],
   'server/middleware': ['server/services', 'server/utils', 'shared/contracts'],
-  'server/utils': ['server/services', 'server/utils', 'server/database', 'server/jobs', 'shared/contracts', 'shared/science'],
-  'server/services': ['server/services', 'server/utils', 'server/database', 'server/jobs', 'server/workers', 'shared/contracts', 'shared/science'],
-  'server/jobs': ['server/jobs', 'server/services', 'server/utils', 'server/database', 'shared/contracts', 'shared/science'],
-  'server/workers': ['server/workers', 'shared/contracts', 'shared/science'],
-  'server/database': ['server/database', 'server/jobs', 'server/services', 'data-seeds', 'shared/contracts', 'shared/science'],
+  'server/utils': ['server/services', 'server/utils', 'server/database', 'server/jobs', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'server/services': ['server/services', 'server/utils', 'server/database', 'server/jobs', 'server/workers', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'server/jobs': ['server/jobs', 'server/services', 'server/utils', 'server/database', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'server/workers': ['server/workers', 'shared/contracts', 'shared/science', 'shared/tables'],
+  'server/database': ['server/database', 'server/jobs', 'server/services', 'data-seeds', 'shared/contracts', 'shared/science', 'shared/tables'],
 }
 
 /** Packages by which the science would reach out of pure numbers. */
