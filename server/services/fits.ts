@@ -6,18 +6,12 @@ import { fit as fitPoints, supportOf } from '#shared/science/fitting'
 import type { FitRequest, FitResult, ModelName, Point } from '#shared/science/fitting/types'
 import { engine } from '#shared/science/version'
 import type { Transaction } from '~~/server/database/client'
-import { fit, fitBlank, fitResult, fitRevision, series, seriesRevision, type FitOptions } from '~~/server/database/schema'
+import { fit, fitBlank, fitResult, fitRevision, series, type FitOptions } from '~~/server/database/schema'
 import { contentOf, type SeriesContent } from './series-content'
 
-/** How a series is to be fitted; without a model, the one its readings support. */
-export interface FitChoice {
-  model?: ModelName
-  options?: FitOptions
-}
-
-/** The readings that enter a fit: exact and not set aside, with the blanks of their batches. */
+/** The readings that enter a fit, with the blanks of their batches. */
 export function pointsOf({ readings }: SeriesContent): Point[] {
-  return readings.filter(one => one.limit === 'exact' && !one.setAside).map(({ x, y, sd, n }) => ({
+  return readings.filter(one => one.entersFit).map(({ x, y, sd, n }) => ({
     x, y, ...(sd !== null && { sd }), ...(n !== null && { n }),
   }))
 }
@@ -37,16 +31,17 @@ function supportedModel(points: Point[], options: FitOptions): ModelName {
 }
 
 /**
- * Fits the newest revision of a series and keeps the fit. Asked twice for the same thing it finds the fit that is there.
+ * Fits the newest revision of a series as it asks to be fitted, and keeps the fit. Asked twice for the same thing it finds the fit that is there.
  *
  * @returns the fit's id, or null where the readings are too few for any model
  */
-export async function fitSeries(tx: Transaction, who: string, id: string, choice: FitChoice = {}): Promise<string | null> {
+export async function fitSeries(tx: Transaction, who: string, id: string): Promise<string | null> {
   const content = (await contentOf(tx, [id])).get(id)
   const points = content ? pointsOf(content) : []
   if (!content?.revision || new Set(points.map(({ x }) => x)).size < fewestPlaces) return null
-  const options = choice.options ?? usualOptions(points)
-  const model = choice.model ?? supportedModel(points, options)
+  const { choice } = content.revision
+  const options = { ...usualOptions(points), ...choice?.options }
+  const model = choice?.model ?? supportedModel(points, options)
   const result = attemptFit({ ...options, model, points })
   return result ? keepFit(tx, who, id, content, { model, options, result }) : null
 }
@@ -64,9 +59,10 @@ function attemptFit(request: FitRequest): FitResult | null {
 
 interface MadeFit { model: ModelName, options: FitOptions, result: FitResult }
 
-async function keepFit(tx: Transaction, who: string, id: string, { revision, readings }: SeriesContent, { model, options, result }: MadeFit) {
-  const blanks = readings.filter(one => one.blank).map(one => one.id)
-  const asked = { revisions: [revision!.id], blanks: [...blanks].sort(), model, options, engine: engine.version }
+// The blanks' revision and not the blanks themselves: going back to earlier blanks is a new state, and its fit the newest one.
+async function keepFit(tx: Transaction, who: string, id: string, { revision, readings, blankRevisions }: SeriesContent, { model, options, result }: MadeFit) {
+  const blanks = readings.filter(one => one.blank && one.entersFit).map(one => one.id)
+  const asked = { revisions: [revision!.id], blanks: blankRevisions, model, options, engine: engine.version }
   const fingerprint = createHash('sha256').update(JSON.stringify(asked)).digest('hex')
   const [owner] = await tx.select({ project: series.project }).from(series).where(eq(series.id, id))
   const project = owner!.project
@@ -92,13 +88,4 @@ export async function currentFits(tx: Transaction, revisions: readonly string[])
     .where(inArray(fitRevision.revision, [...revisions]))
     .orderBy(fitRevision.revision, desc(fit.createdAt), desc(fit.id), fitResult.createdAt)
   return new Map(rows.map(({ revision, id, result }) => [revision, { ...result, id }]))
-}
-
-/** How a series was fitted last, whatever its revision then. */
-export async function lastChoice(tx: Transaction, id: string): Promise<FitChoice> {
-  const [last] = await tx.select({ model: fit.model, options: fit.options }).from(fit)
-    .innerJoin(fitRevision, eq(fitRevision.fit, fit.id))
-    .innerJoin(seriesRevision, eq(seriesRevision.id, fitRevision.revision))
-    .where(eq(seriesRevision.series, id)).orderBy(desc(fit.createdAt), desc(fit.id)).limit(1)
-  return last && last.model !== 'expression' ? { model: last.model, options: last.options } : {}
 }

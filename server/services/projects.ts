@@ -2,21 +2,25 @@ import { and, asc, eq, gt, isNull } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import type { z } from 'zod'
 import type { newProjectContract, Project, ProjectDetail } from '#shared/contracts/projects'
-import { asPerson } from '~~/server/database/client'
+import { asPerson, type Transaction } from '~~/server/database/client'
 import { auditEvent, campaign, lab, membership, person, project, projectLab, projectMember } from '~~/server/database/schema'
 import { cursorOf, pageOf, type Page } from './pages'
 
 export type ProjectRole = typeof projectMember.$inferSelect.role
 
+const editing: readonly ProjectRole[] = ['owner', 'editor']
+
+export const mayEdit = (role: ProjectRole | null): boolean => role !== null && editing.includes(role)
+
 /** What a person is in a project; null where there is nothing to see. */
-export function projectRight(who: string, id: string): Promise<ProjectRole | null> {
-  return asPerson(who, async (tx) => {
-    const [found] = await tx.select({ role: projectMember.role }).from(projectMember)
-      .innerJoin(project, eq(project.id, projectMember.project))
-      .where(and(eq(projectMember.project, id), eq(projectMember.person, who), isNull(project.deletedAt)))
-    return found?.role ?? null
-  })
+export async function roleIn(tx: Transaction, who: string, id: string): Promise<ProjectRole | null> {
+  const [found] = await tx.select({ role: projectMember.role }).from(projectMember)
+    .innerJoin(project, eq(project.id, projectMember.project))
+    .where(and(eq(projectMember.project, id), eq(projectMember.person, who), isNull(project.deletedAt)))
+  return found?.role ?? null
 }
+
+export const projectRight = (who: string, id: string) => asPerson(who, tx => roleIn(tx, who, id))
 
 const fields = {
   id: project.id, name: project.name, question: project.question, invented: project.invented,

@@ -1,34 +1,44 @@
-import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm'
-import type { Series } from '#shared/contracts/series'
+import { asc, desc, eq, inArray, sql } from 'drizzle-orm'
+import { alias } from 'drizzle-orm/pg-core'
+import type { FitChoice, Series } from '#shared/contracts/series'
 import type { Transaction } from '~~/server/database/client'
-import { batch, person, reading, revisionReading, seriesRevision } from '~~/server/database/schema'
+import { batch, batchRevision, batchRevisionReading, campaign, person, reading, revisionReading, series, seriesRevision, upload } from '~~/server/database/schema'
 
 type ListedReading = Series['readings'][number]
 
 /** The newest revision of a series with what it holds: the blanks of its batches first, then its own readings. */
 export interface SeriesContent {
-  revision: { id: string, number: number } | null
+  revision: { id: string, number: number, choice: FitChoice | null } | null
   readings: ListedReading[]
   /** Day of the earliest batch; null where no batch is dated. */
   firstDay: string | null
+  /** The states of the blanks it uses. */
+  blankRevisions: string[]
 }
 
+const earlier = alias(reading, 'earlier')
 const fields = {
   id: reading.id, x: reading.concentration, y: reading.value, sd: reading.sd, n: reading.n,
-  direction: reading.direction, limit: reading.limit, note: reading.note,
+  direction: reading.direction, limit: reading.limit, note: reading.note, origin: reading.origin, file: upload.name,
   batch: reading.batch, batchLabel: batch.label, batchDay: batch.measuredOn,
+  replaces: { x: earlier.concentration, y: earlier.value, sd: earlier.sd, n: earlier.n }, changeReason: reading.changeReason, changeWords: reading.changeWords,
 }
-type Row = Awaited<ReturnType<typeof blanksOf>>[number]
+const originUpload = sql`(${reading.origin} ->> 'upload')::uuid`
+
+interface Pinned { revision: string, batch: string | null, batchLabel: string | null, batchDay: string | null, reason: string | null, by: string | null, at: Date | null }
+type Row = Pinned & Omit<Awaited<ReturnType<typeof pinnedReadings>>[number], keyof Pinned>
 
 /** Reads the newest revisions of many series in three queries. */
-export async function contentOf(tx: Transaction, series: readonly string[]): Promise<Map<string, SeriesContent>> {
-  if (series.length === 0) return new Map()
-  const revisions = await tx.selectDistinctOn([seriesRevision.series], { id: seriesRevision.id, series: seriesRevision.series, number: seriesRevision.number })
-    .from(seriesRevision).where(inArray(seriesRevision.series, [...series]))
+export async function contentOf(tx: Transaction, ids: readonly string[]): Promise<Map<string, SeriesContent>> {
+  if (ids.length === 0) return new Map()
+  const revisions = await tx.selectDistinctOn([seriesRevision.series], {
+    id: seriesRevision.id, series: seriesRevision.series, number: seriesRevision.number, choice: seriesRevision.choice, clouds: campaign.clouds,
+  }).from(seriesRevision).innerJoin(series, eq(series.id, seriesRevision.series)).innerJoin(campaign, eq(campaign.id, series.campaign))
+    .where(inArray(seriesRevision.series, [...ids]))
     .orderBy(seriesRevision.series, desc(seriesRevision.number))
-  const own = await pinnedReadings(tx, revisions.map(({ id }) => id))
+  const own: Row[] = await pinnedReadings(tx, revisions.map(({ id }) => id))
   const blanks = await blanksOf(tx, [...new Set(own.flatMap(row => row.batch ?? []))])
-  return new Map(series.map((id) => {
+  return new Map(ids.map((id) => {
     const revision = revisions.find(one => one.series === id)
     return [id, assemble(revision, own.filter(row => row.revision === revision?.id), blanks)]
   }))
@@ -39,42 +49,59 @@ function pinnedReadings(tx: Transaction, revisions: string[]) {
     ...fields, revision: revisionReading.revision, reason: revisionReading.setAsideReason, at: revisionReading.setAsideAt, by: person.name,
   }).from(revisionReading)
     .innerJoin(reading, eq(reading.id, revisionReading.reading))
+    .leftJoin(earlier, eq(earlier.id, reading.replaces))
+    .leftJoin(upload, eq(upload.id, originUpload))
     .leftJoin(batch, eq(batch.id, reading.batch))
     .leftJoin(person, eq(person.id, revisionReading.setAsideBy))
     .where(inArray(revisionReading.revision, revisions))
     .orderBy(revisionReading.revision, asc(revisionReading.number))
 }
 
+/** The blanks of the newest revision of each batch, those set aside among them. */
 function blanksOf(tx: Transaction, batches: string[]) {
-  return tx.select(fields).from(reading)
+  const newest = tx.selectDistinctOn([batchRevision.batch], { id: batchRevision.id }).from(batchRevision)
+    .where(inArray(batchRevision.batch, batches)).orderBy(batchRevision.batch, desc(batchRevision.number)).as('newest')
+  return tx.select({
+    ...fields, revision: batchRevisionReading.revision, reason: batchRevisionReading.setAsideReason, at: batchRevisionReading.setAsideAt, by: person.name,
+  }).from(newest)
+    .innerJoin(batchRevisionReading, eq(batchRevisionReading.revision, newest.id))
+    .innerJoin(reading, eq(reading.id, batchRevisionReading.reading))
+    .leftJoin(earlier, eq(earlier.id, reading.replaces))
+    .leftJoin(upload, eq(upload.id, originUpload))
     .innerJoin(batch, eq(batch.id, reading.batch))
-    .where(and(isNull(reading.series), inArray(reading.batch, batches)))
-    .orderBy(asc(batch.measuredOn), asc(reading.id))
+    .leftJoin(person, eq(person.id, batchRevisionReading.setAsideBy))
+    .orderBy(asc(batch.measuredOn), asc(batch.id), asc(batchRevisionReading.number))
 }
 
-type OwnRow = Awaited<ReturnType<typeof pinnedReadings>>[number]
+interface Revision { id: string, number: number, choice: FitChoice | null, clouds: typeof campaign.$inferSelect.clouds }
 
-function assemble(revision: { id: string, number: number } | undefined, own: OwnRow[], allBlanks: Row[]): SeriesContent {
+function assemble(revision: Revision | undefined, own: Row[], allBlanks: Row[]): SeriesContent {
   const batches = new Set(own.map(row => row.batch))
   const blanks = allBlanks.filter(row => batches.has(row.batch))
-  const listed = [
-    ...blanks.map(row => ({ row, blank: true, setAside: null })),
-    ...own.map(row => ({ row, blank: false, setAside: setAsideOf(row) })),
-  ]
+  const branch = revision?.clouds === 'on-cooling' ? 'cooling' : 'heating'
+  const listed = [...blanks.map(row => ({ row, blank: true })), ...own.map(row => ({ row, blank: false }))]
   const days = own.flatMap(row => row.batchDay ?? []).sort()
   return {
-    revision: revision ? { id: revision.id, number: revision.number } : null,
-    readings: listed.map(({ row: { batch, batchLabel, batchDay: _, ...row }, blank, setAside }, index) => ({
-      ...pick(row), number: index + 1, blank, setAside, batch: batch ? { id: batch, label: batchLabel ?? '' } : null,
-    })),
+    revision: revision ? { id: revision.id, number: revision.number, choice: revision.choice } : null,
+    readings: listed.map(({ row, blank }, index) => ({ ...readingOf(row, branch), number: index + 1, blank })),
     firstDay: days[0] ?? null,
+    blankRevisions: [...new Set(blanks.map(row => row.revision))].sort(),
   }
 }
 
-function pick({ id, x, y, sd, n, direction, limit, note }: Omit<Row, 'batch' | 'batchLabel' | 'batchDay'>) {
-  return { id, x, y, sd, n, direction, limit, note }
+function readingOf(row: Row, branch: 'heating' | 'cooling'): Omit<ListedReading, 'number' | 'blank'> {
+  const { id, x, y, sd, n, direction, limit, note, batch, batchLabel, reason, by, at, changeReason, changeWords } = row
+  return {
+    id, x, y, sd, n, direction, limit, note,
+    batch: batch ? { id: batch, label: batchLabel ?? '' } : null,
+    setAside: reason && at ? { reason, by: by ?? 'a former member', at: at.toISOString() } : null,
+    entersFit: limit === 'exact' && !reason && direction === branch,
+    changed: row.replaces && changeReason ? { ...row.replaces, reason: changeReason, words: changeWords } : null,
+    origin: originInWords(row),
+  }
 }
 
-function setAsideOf({ reason, by, at }: OwnRow): ListedReading['setAside'] {
-  return reason && at ? { reason, by: by ?? 'a former member', at: at.toISOString() } : null
+function originInWords({ origin, file }: Row): string {
+  if (origin.kind === 'file') return `${file ?? 'a file'}, row ${origin.row}`
+  return origin.kind === 'demonstration' ? 'invented for the demonstration' : origin.kind
 }

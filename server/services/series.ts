@@ -1,13 +1,14 @@
-import { and, asc, desc, eq, gt, isNull } from 'drizzle-orm'
+import { and, asc, countDistinct, desc, eq, gt, isNull } from 'drizzle-orm'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 import { ScienceError } from '#shared/science/errors'
 import { asPerson, type Transaction } from '~~/server/database/client'
-import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
+import { batch, batchRevision, campaign, lab, person, project, reading, sample, series, seriesRevision, stock } from '~~/server/database/schema'
 import { conditionsOf } from './conditions'
 import { ServiceError } from './errors'
 import { compareInPool } from './fit-pool'
 import { currentFits, pointsOf, usualOptions } from './fits'
 import { cursorOf, pageOf, type Page } from './pages'
+import { mayEdit, roleIn } from './projects'
 import { contentOf, type SeriesContent } from './series-content'
 
 /** The project of a series that a person may see; null where there is nothing to see. */
@@ -56,13 +57,16 @@ function summaryOf(head: Head, content: SeriesContent, fits: Awaited<ReturnType<
 
 /** One series: readings, current fit, how the models compare, revisions. */
 export async function showSeries(who: string, id: string): Promise<Series> {
-  const { head, content, fits, revisions } = await asPerson(who, tx => readSeries(tx, id))
+  const { head, role, content, batches, fits, revisions } = await asPerson(who, tx => readSeries(tx, who, id))
   return {
     id,
     project: head.project,
     salt: saltOf(head),
     campaign: { ...campaignOf(head), conditions: conditionsOf(head) },
+    canEdit: mayEdit(role),
     revision: content.revision?.number ?? null,
+    choice: content.revision?.choice ?? null,
+    batches,
     readings: content.readings,
     fit: (content.revision && fits.get(content.revision.id)) ?? null,
     support: await supportFor(content),
@@ -70,11 +74,23 @@ export async function showSeries(who: string, id: string): Promise<Series> {
   }
 }
 
-async function readSeries(tx: Transaction, id: string) {
+async function readSeries(tx: Transaction, who: string, id: string) {
   const [found] = await heads(tx).where(eq(series.id, id))
   const content = (await contentOf(tx, [id])).get(id)!
   const fits = await currentFits(tx, content.revision ? [content.revision.id] : [])
-  return { head: found!, content, fits, revisions: await revisionsOf(tx, id) }
+  const role = await roleIn(tx, who, found!.project.id)
+  return { head: found!, role, content, fits, batches: await batchesOf(tx, found!.campaign.id), revisions: await revisionsOf(tx, id) }
+}
+
+/** The batches of a campaign, each with the newest state of its blanks and the number of series that lean on them. */
+async function batchesOf(tx: Transaction, of: string): Promise<Series['batches']> {
+  const usedBy = tx.select({ batch: reading.batch, count: countDistinct(reading.series).as('used_by') }).from(reading).groupBy(reading.batch).as('used')
+  const rows = await tx.selectDistinctOn([batch.id], {
+    id: batch.id, label: batch.label, measuredOn: batch.measuredOn, revision: batchRevision.number, usedBy: usedBy.count,
+  }).from(batch)
+    .leftJoin(batchRevision, eq(batchRevision.batch, batch.id)).leftJoin(usedBy, eq(usedBy.batch, batch.id))
+    .where(eq(batch.campaign, of)).orderBy(batch.id, desc(batchRevision.number))
+  return rows.map(({ usedBy: count, ...row }) => ({ ...row, usedBy: count ?? 0 }))
 }
 
 async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisions']> {

@@ -1,6 +1,6 @@
 import type { H3Event } from 'h3'
 import { jobRight } from '~~/server/services/jobs'
-import { projectRight, type ProjectRole } from '~~/server/services/projects'
+import { mayEdit, projectRight } from '~~/server/services/projects'
 import { seriesProject } from '~~/server/services/series'
 import { ServiceError } from '~~/server/services/errors'
 import type { Visitor } from '~~/server/services/sessions'
@@ -14,8 +14,6 @@ export interface AccessRule<Person extends Visitor | null = Visitor | null> {
   admit: (event: H3Event, params: Record<string, string>) => Promise<Person>
 }
 
-const editing: readonly ProjectRole[] = ['owner', 'editor']
-
 async function signedInVisitor(event: H3Event): Promise<Visitor> {
   const visitor = await visitorOf(event)
   if (!visitor) throw new ServiceError('signed-out', 'This needs an account. Sign in, then try again.')
@@ -27,7 +25,7 @@ export const nowhere = () => new ServiceError('not-found', 'There is nothing at 
 async function admitToProject(visitor: Visitor, project: string | null, mustEdit: boolean) {
   const role = project && await projectRight(visitor.id, project)
   if (!role) throw nowhere()
-  if (mustEdit && !editing.includes(role)) {
+  if (mustEdit && !mayEdit(role)) {
     throw new ServiceError('forbidden', 'You read this project but do not change it. Ask its owner to make you an editor.')
   }
   return visitor

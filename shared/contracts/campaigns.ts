@@ -9,6 +9,7 @@ export const batchParams = z.object({ batch: id })
 export const cloudings = ['on-heating', 'on-cooling'] as const
 export const criteria = ['onset', 'fraction', 'steepest', 'departure', 'sigmoid'] as const
 export const enthalpyBases = ['per-repeat-unit', 'per-cooperative-unit'] as const
+export const replicateKinds = ['independent-samples', 'repeat-scans'] as const
 
 const campaignFields = {
   name: requiredText(120),
@@ -24,7 +25,7 @@ const campaignFields = {
   criterionFraction: later(positive.lt(1, 'must be below 1')).describe('fraction of the transmittance, with criterion "fraction"'),
   rate: later(positive).describe('K/min'),
   hold: later(z.number().min(0, 'must be 0 or more')).describe('min held before a ramp'),
-  replicateKind: later(z.enum(['independent-samples', 'repeat-scans'])).describe('what a replicate is'),
+  replicateKind: later(z.enum(replicateKinds)).describe('what a replicate is'),
   transitionEnthalpy: later(z.number()).describe('kJ/mol'),
   transitionEnthalpyBasis: later(z.enum(enthalpyBases)),
   startedOn: later(day),
@@ -49,7 +50,7 @@ export const newBatchContract = z.strictObject({
 export const campaignContract = z.object({
   id, name: z.string(), project: named, lab: named, clouds: z.enum(cloudings), sample: sampleContract.nullable(), instrument: instrumentContract.nullable(),
   solvent: z.string(), buffer: z.string().nullable(), ph: z.number().nullable(), polymerConcentration: z.number().nullable(), criterion: z.enum(criteria).nullable(), criterionFraction: z.number().nullable(),
-  rate: z.number().nullable(), hold: z.number().nullable(), replicateKind: z.enum(['independent-samples', 'repeat-scans']).nullable(),
+  rate: z.number().nullable(), hold: z.number().nullable(), replicateKind: z.enum(replicateKinds).nullable(),
   transitionEnthalpy: z.number().nullable(), transitionEnthalpyBasis: z.enum(enthalpyBases).nullable(), startedOn: z.iso.date().nullable(),
   conditions: z.string(), missing: z.array(z.string()).describe('what a good report states and this campaign does not yet, in words'),
   batches: z.array(batchContract),

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { asApp, asOwner, personId, refusalOf } from './support/database'
 import { people } from './support/server'
 
-const history = ['series_revision', 'reading', 'revision_reading', 'fit', 'fit_revision', 'fit_blank', 'fit_result', 'audit_event']
+const history = ['series_revision', 'reading', 'revision_reading', 'fit', 'fit_revision', 'fit_blank', 'fit_result', 'audit_event', 'batch_revision', 'batch_revision_reading']
 const refusedByTrigger = '23001'
 const insufficientPrivilege = '42501'
 const column = (table: string) => table === 'audit_event' ? 'action' : 'project_id'

@@ -3,9 +3,9 @@ import type { NamedRequest } from '#shared/science/diagnostics/influence'
 
 export type SeriesReading = Series['readings'][number]
 
-/** The readings behind the fit, as the server takes them: exact ones that are not set aside. */
+/** The readings behind the fit. */
 export function usedReadings({ readings }: Series): SeriesReading[] {
-  return readings.filter(reading => reading.limit === 'exact' && !reading.setAside)
+  return readings.filter(reading => reading.entersFit)
 }
 
 /** The request that gives the series' current fit again; null without a fit of a named model. */

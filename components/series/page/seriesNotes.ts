@@ -18,7 +18,7 @@ export interface KeyedNote {
 }
 
 function fitWith(series: Series, reading: SeriesReading): FitResult | null {
-  const request = fitRequest(series, series.readings.filter(other => other === reading || usedReadings(series).includes(other)))
+  const request = fitRequest(series, series.readings.filter(other => other === reading || other.entersFit))
   return request && fitOrNone(request)
 }
 

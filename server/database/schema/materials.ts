@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm'
 import { check, date, doublePrecision, foreignKey, index, pgEnum, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
+import { instrumentKinds } from '#shared/contracts/materials'
 import { createdAt, identity } from './columns'
 import { lab } from './people'
 import { project, projectLab } from './projects'
@@ -40,6 +41,7 @@ export const stock = pgTable('stock', {
   /** Measured concentration over the labelled one; null where nobody measured it. */
   assay: doublePrecision('assay'),
   relativeUncertainty: doublePrecision('relative_uncertainty'),
+  makeUp: text('make_up'),
   createdAt: createdAt(),
 }, table => [
   unique('stock_in_project').on(table.id, table.project),
@@ -48,7 +50,7 @@ export const stock = pgTable('stock', {
   check('stock_fractions', sql`${table.purity} > 0 and ${table.purity} <= 1 and ${table.assay} > 0 and ${table.relativeUncertainty} >= 0 and ${table.hydrate} >= 0`),
 ]).enableRLS()
 
-export const instrumentKind = pgEnum('instrument_kind', ['transmittance', 'absorbance', 'scattering', 'by-eye'])
+export const instrumentKind = pgEnum('instrument_kind', instrumentKinds)
 
 /** Path length in mm, wavelength in nm, offset in K (read minus true). */
 export const instrument = pgTable('instrument', {

@@ -32,3 +32,11 @@ export const projectMember = pgTable('project_member', {
   primaryKey({ columns: [table.project, table.person] }),
   index('project_member_person').on(table.person),
 ]).enableRLS()
+
+/** When a person last looked at a project's front page, and the time before: what changed since then is news. */
+export const projectVisit = pgTable('project_visit', {
+  project: uuid('project_id').notNull().references(() => project.id),
+  person: uuid('person_id').notNull().references(() => person.id, { onDelete: 'cascade' }),
+  at: instant('at').notNull().defaultNow(),
+  before: instant('before'),
+}, table => [primaryKey({ columns: [table.project, table.person] })]).enableRLS()

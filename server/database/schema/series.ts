@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm'
-import { check, doublePrecision, foreignKey, index, integer, jsonb, pgEnum, pgTable, primaryKey, text, unique, uuid } from 'drizzle-orm/pg-core'
-import { readingLimits } from '#shared/contracts/series'
+import { check, doublePrecision, foreignKey, index, integer, jsonb, pgEnum, pgTable, primaryKey, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
+import { changeReasons, readingLimits, type FitChoice } from '#shared/contracts/series'
 import { batch, campaign, temperatureDirection } from './campaigns'
 import { createdAt, deletedAt, identity, instant } from './columns'
 import { stock } from './materials'
@@ -25,6 +25,8 @@ export const series = pgTable('series', {
   unique('series_in_project').on(table.id, table.project),
   foreignKey({ name: 'series_campaign', columns: [table.campaign, table.project], foreignColumns: [campaign.id, campaign.project] }),
   foreignKey({ name: 'series_stock', columns: [table.stock, table.project], foreignColumns: [stock.id, stock.project] }),
+  /** Two people who import at once add to one series. */
+  uniqueIndex('series_salt_unique').on(table.campaign, table.saltFormula, table.scale).where(sql`${table.deletedAt} is null`),
   index('series_project').on(table.project, table.id),
   index('series_campaign').on(table.campaign),
 ]).enableRLS()
@@ -36,6 +38,8 @@ export const seriesRevision = pgTable('series_revision', {
   series: uuid('series_id').notNull(),
   number: integer('number').notNull(),
   summary: text('summary').notNull(),
+  /** How it asks to be fitted; null: by the form its readings support. */
+  choice: jsonb('choice').$type<FitChoice>(),
   madeBy: uuid('made_by').notNull().references(() => person.id),
   createdAt: createdAt(),
 }, table => [
@@ -49,6 +53,7 @@ export interface Component { salt: string, value: number, unit: 'mol/L' | 'mol/k
 export type Origin = { kind: 'typed' } | { kind: 'demonstration' } | { kind: 'file', upload: string, row: number } | { kind: 'ramp', ramp: string }
 
 export const readingLimit = pgEnum('reading_limit', readingLimits)
+export const changeReason = pgEnum('change_reason', changeReasons)
 export const sdMeaning = pgEnum('sd_meaning', ['sd-of-replicates', 'standard-uncertainty'])
 
 /** One cloud point at one concentration. A blank has a batch and no series. Never changed: a correction is a new reading in a new revision. */
@@ -74,11 +79,16 @@ export const reading = pgTable('reading', {
   limit: readingLimit('limit').notNull().default('exact'),
   note: text('note'),
   origin: jsonb('origin').$type<Origin>().notNull(),
+  /** The reading that this one corrects, and why. */
+  replaces: uuid('replaces'),
+  changeReason: changeReason('change_reason'),
+  changeWords: text('change_words'),
   createdAt: createdAt(),
 }, table => [
   unique('reading_in_project').on(table.id, table.project),
   foreignKey({ name: 'reading_series', columns: [table.series, table.project], foreignColumns: [series.id, series.project] }),
   foreignKey({ name: 'reading_batch', columns: [table.batch, table.project], foreignColumns: [batch.id, batch.project] }),
+  foreignKey({ name: 'reading_replaces', columns: [table.replaces, table.project], foreignColumns: [table.id, table.project] }),
   index('reading_series').on(table.series),
   index('reading_batch').on(table.batch),
   check('reading_has_place', sql`${table.series} is not null or ${table.batch} is not null`),
@@ -87,6 +97,7 @@ export const reading = pgTable('reading', {
   check('reading_value', sql`${table.value} > -273.15 and ${table.value} < 1000`),
   check('reading_sd', sql`${table.sd} >= 0 and ${table.sd} < 'Infinity'`),
   check('reading_n', sql`${table.n} >= 1`),
+  check('reading_change_has_reason', sql`(${table.replaces} is null) = (${table.changeReason} is null)`),
 ]).enableRLS()
 
 /** Which readings a revision holds, in which order, and which of them are set aside and why. */

@@ -6,7 +6,7 @@ import table from '~~/data-seeds/demo/readings.tsv'
 import setting from '~~/data-seeds/demo/setting.json'
 import truth from '~~/data-seeds/demo/truth.json'
 import type { Transaction } from '../client'
-import { reading, revisionReading, series, seriesRevision } from '../schema'
+import { batchRevision, batchRevisionReading, reading, revisionReading, series, seriesRevision } from '../schema'
 import { historyOf, type KnownReading, type PlannedRevision } from './demo-history'
 import { batchKey, campaignKey, labNames, plantPlaces, stockKey, type LabName, type Places } from './demo-places'
 import { peopleByEmail, projectByName, type Seed } from './seeding'
@@ -79,6 +79,21 @@ async function plantRevisions(tx: Transaction, project: string, plan: SeriesPlan
   }
 }
 
+/** The blanks of each day as the first revision of its batch. */
+async function plantBlanks(tx: Transaction, project: string, places: Places, blanks: readonly KnownReading[], people: ReadonlyMap<string, string>) {
+  for (const [key, batch] of places.batches) {
+    const ofBatch = blanks.filter(({ row }) => batchKey(row.lab, row.day) === key)
+    const first = ofBatch[0]?.row
+    if (!first) continue
+    const id = v7()
+    await tx.insert(batchRevision).values({
+      id, project, batch, number: 1, summary: `${ofBatch.length} blanks typed in from the lab book`,
+      madeBy: people.get(setting.labs[first.lab as LabName].recordedBy)!, createdAt: new Date(`${first.day}T16:00:00Z`),
+    })
+    await tx.insert(batchRevisionReading).values(ofBatch.map((blank, place) => ({ project, revision: id, reading: blank.id, number: place + 1 })))
+  }
+}
+
 /** Every reading that any revision holds, once. */
 function readingsOf(plan: SeriesPlan): KnownReading[] {
   return [...new Map(plan.revisions.flatMap(revision => revision.readings.map(({ reading: known }) => [known.id, known] as const))).values()]
@@ -96,10 +111,12 @@ export const demo: Seed = {
     const people = await peopleByEmail(tx, emails)
 
     await tx.insert(series).values(plans.map(plan => plan.row))
+    const blanks = readings.filter(row => !row.anion).map((row): KnownReading => ({ id: v7(), row }))
     await tx.insert(reading).values([
-      ...readings.filter(row => !row.anion).map(row => readingRow(project, places, row, v7(), null)),
+      ...blanks.map(({ id, row }) => readingRow(project, places, row, id, null)),
       ...plans.flatMap(plan => readingsOf(plan).map(({ id, row }) => readingRow(project, places, row, id, plan))),
     ])
+    await plantBlanks(tx, project, places, blanks, people)
     for (const plan of plans) await plantRevisions(tx, project, plan, people)
   },
 }

@@ -13,6 +13,7 @@ const readings = [...rows.filter(row => !row.anion && row.day === '2026-03-09'),
   id, number: index + 1, x: row.concentration, y: row.value, sd: row.sdOfReplicates / Math.sqrt(row.n), n: row.n, batch: null,
   direction: 'heating', limit: 'exact', blank: !row.anion, note: row.note || null,
   setAside: row.setAsideReason ? { reason: row.setAsideReason, by: 'Ines Tamsel', at: `${row.setAsideOn}T09:10:00.000Z` } : null,
+  entersFit: !row.setAsideReason, changed: null, origin: 'invented for the demonstration',
 }))
 const points = readings.filter(one => !one.setAside).map(({ x, y, n }) => ({ x, y, n: n! }))
 
@@ -21,7 +22,10 @@ const series: Series = {
   project: { id, name: 'Shadehouse gel' },
   salt: { formula: 'NaSCN', name: 'sodium thiocyanate', anion: 'SCN^-', cation: 'Na^+' },
   campaign: { id, name: 'spring', lab: { id, name: 'Norrvik' }, clouds: 'on-heating', conditions: '' },
+  canEdit: true,
   revision: 4,
+  choice: null,
+  batches: [],
   readings,
   fit: { ...fit({ model: 'linear-langmuir', weighting: 'replicates', points }), id },
   support: compareModels({ weighting: 'replicates', points }),
