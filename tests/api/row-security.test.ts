@@ -71,7 +71,7 @@ describe('what is written', () => {
     project = rows[0].project_id
   })
 
-  const newSeries = 'insert into series (id, project_id, campaign_id, salt_formula, salt_name, anion, cation) values ($1, $2, $3, \'NaCl\', \'sodium chloride\', \'Cl^-\', \'Na^+\')'
+  const newSeries = 'insert into series (id, project_id, campaign_id, salt_formula, salt_name, anion, cation) values ($1, $2, $3, \'KCl\', \'potassium chloride\', \'Cl^-\', \'K^+\')'
   const writes = async (email: string | null) => asApp(email && await personId(email), client =>
     refusalOf(client, newSeries, [v7(), project, campaign]))
 
