@@ -1,3 +1,5 @@
+import { cationNames, furtherAnionNames } from './further-ions'
+
 /** The anions of the demonstration and the shelf's first rows, from strongly to weakly hydrated (common practice). */
 export interface Ion {
   /** plain text, such as SO4^2- */
@@ -27,11 +29,21 @@ const names: readonly (readonly [formula: string, name: string])[] = [
   ['SCN^-', 'thiocyanate'],
 ]
 
+function ionFrom([formula, name]: readonly [formula: string, name: string]): Ion {
+  return { formula, name, charge: chargeOf(formula), pieces: formulaPieces(formula) }
+}
+
 /** Strongly → weakly hydrated. */
-export const anions: readonly Ion[] = names.map(([formula, name]) => ({ formula, name, charge: chargeOf(formula), pieces: formulaPieces(formula) }))
+export const anions: readonly Ion[] = names.map(ionFrom)
 
-const byFormula = new Map(anions.map(ion => [ion.formula, ion]))
+/** Anions that tables name beyond these ten; they have no place in the order. */
+export const furtherAnions: readonly Ion[] = furtherAnionNames.map(ionFrom)
 
+export const cations: readonly Ion[] = cationNames.map(ionFrom)
+
+const byFormula = new Map([...anions, ...furtherAnions].map(ion => [ion.formula, ion]))
+
+/** An anion of the order or a further one. */
 export function anionOf(formula: string): Ion | undefined {
   return byFormula.get(formula)
 }
