@@ -59,8 +59,8 @@ export function isElementFormula(formula: string): boolean {
  * @throws ScienceError 'not-a-formula' for anything but element symbols, counts and parentheses
  */
 export function molarMass(formula: string): number {
-  const [salt = '', crystalWater] = formula.split(/[·.](?=\d*(?:\.\d+)?H2O$)/)
-  const waters = crystalWater === undefined ? 0 : Number(crystalWater.slice(0, -'H2O'.length) || 1)
+  const [, salt = '', dot, count] = /^(.+?)(?:([·.])(\d+(?:\.\d+)?)?H2O)?$/.exec(formula) ?? []
+  const waters = dot ? Number(count ?? 1) : 0
   const mass = massOf(salt)
   if (mass === null) throw new ScienceError('not-a-formula', [{ path: 'formula', message: `${formula} is not a formula of known elements; write it like Na2SO4 or Na2SO4·10H2O` }])
   return mass + waters * water
