@@ -48,11 +48,22 @@ function bodiesOf({ formula }: Ion, { bodies = '' }: Spelling): string[] {
   return [formula.split('^')[0]!, ...bodies.split(' ').filter(Boolean)]
 }
 
-/** Formulas without charge, each with its ions: iron has two. */
-function bodyIndex(ions: readonly Ion[], spellings: Readonly<Record<string, Spelling>>, change: (body: string) => string): Map<string, Ion[]> {
-  const index = new Map<string, Ion[]>()
+/** A formula without charge and the ions it may stand for: iron has two. */
+export interface Body {
+  body: string
+  grouped: string
+  ions: Ion[]
+}
+export type BodyIndex = ReadonlyMap<string, Body>
+
+function bodyIndex(ions: readonly Ion[], spellings: Readonly<Record<string, Spelling>>, change: (body: string) => string): BodyIndex {
+  const index = new Map<string, Body>()
   for (const ion of ions) {
-    for (const body of bodiesOf(ion, spellings[ion.formula] ?? {}).map(change)) index.set(body, [...index.get(body) ?? [], ion])
+    for (const body of bodiesOf(ion, spellings[ion.formula] ?? {}).map(change)) {
+      const known = index.get(body)
+      if (known) known.ions.push(ion)
+      else index.set(body, { body, grouped: `(${body})`, ions: [ion] })
+    }
   }
   return index
 }
@@ -63,8 +74,8 @@ export const anionsByName = withCounts(uncountedAnions)
 export const cationsByName = withCounts(uncountedCations)
 
 export interface BodyIndexes {
-  anions: Map<string, Ion[]>
-  cations: Map<string, Ion[]>
+  anions: BodyIndex
+  cations: BodyIndex
 }
 
 const asWritten = (body: string) => body

@@ -2,12 +2,12 @@ import { ScienceError } from '../errors'
 
 /**
  * Standard atomic weights [g/mol] of the elements that the salts here contain; for elements given as an interval the
- * conventional value.
+ * conventional value; deuterium by itself.
  * @source IUPAC Commission on Isotopic Abundances and Atomic Weights, standard atomic weights 2021 (from memory,
  * checked by the masses in data-seeds/chemistry/salt_hydrates.csv)
  */
 const atomicWeights: Readonly<Record<string, number>> = {
-  H: 1.008, Li: 6.94, B: 10.81, C: 12.011, N: 14.007, O: 15.999, F: 18.998403162, Na: 22.98976928, Mg: 24.305, Al: 26.9815384, Si: 28.085,
+  H: 1.008, D: 2.014101778, Li: 6.94, B: 10.81, C: 12.011, N: 14.007, O: 15.999, F: 18.998403162, Na: 22.98976928, Mg: 24.305, Al: 26.9815384, Si: 28.085,
   P: 30.973761998, S: 32.06, Cl: 35.45, K: 39.0983, Ca: 40.078, Cr: 51.9961, Mn: 54.938043, Fe: 55.845, Co: 58.933194, Ni: 58.6934, Cu: 63.546,
   Zn: 65.38, Se: 78.971, Br: 79.904, Rb: 85.4678, Sr: 87.62, Mo: 95.95, Ag: 107.8682, Cd: 112.414, I: 126.90447, Cs: 132.90545196,
   Ba: 137.327, La: 138.90547, W: 183.84, Re: 186.207,

@@ -3,7 +3,7 @@ import type { Ion } from './ions'
 import { readFormula, type Spelt } from './salt-formulas'
 import { guessSalt } from './salt-spelling'
 import { isBlank, tidy, withoutCrystalWater } from './salt-text'
-import { readName, saltKey } from './salt-words'
+import { readName, readSymbolAndName, saltKey } from './salt-words'
 import { sodiumSaltOf, type Salt } from './salts'
 
 /**
@@ -31,20 +31,20 @@ function withoutCharges(formula: string): string {
   return formula.replace(/\s/g, '').replace(/\^\d*[+-]/g, '')
 }
 
-/** Na+ SCN-: charges without a caret, as in running text. */
-function withoutPlainCharges(formula: string): string {
-  return formula.replace(/\s/g, '').replace(/\^?\d?[+-]/g, '')
+/** Na+ SCN-: single charges without a caret. */
+function spellChargedIons(text: string): Spelt | null {
+  return text.includes('+') && text.includes('-') ? readFormula(text.replace(/[\s+-]/g, '')) : null
 }
 
 function spell(text: string): Spelt | null {
-  return readFormula(withoutCharges(text)) ?? (/[+-]/.test(text) ? readFormula(withoutPlainCharges(text)) : null) ?? readName(saltKey(text))
+  return readFormula(withoutCharges(text)) ?? spellChargedIons(text) ?? readName(saltKey(text)) ?? readSymbolAndName(text)
 }
 
 function loneAnion(text: string): Ion | undefined {
-  const bodies = [withoutCharges(text), text.replace(/\s/g, '').replace(/\^?\d?-$/, '')]
-  for (const body of bodies) {
-    const [ion] = bodiesAsWritten.anions.get(body) ?? bodiesInLowerCase.anions.get(body.toLowerCase()) ?? []
-    if (ion) return ion
+  const formula = withoutCharges(text)
+  for (const body of [formula, formula.replace(/-$/, ''), formula.replace(/\d-$/, '')]) {
+    const found = bodiesAsWritten.anions.get(body) ?? bodiesInLowerCase.anions.get(body.toLowerCase())
+    if (found) return found.ions[0]
   }
   return anionsByName.get(saltKey(text).replace(/ions?$/, ''))?.ion
 }

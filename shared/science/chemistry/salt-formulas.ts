@@ -1,4 +1,4 @@
-import { bodiesAsWritten, bodiesInLowerCase, type BodyIndexes } from './ion-lookup'
+import { bodiesAsWritten, bodiesInLowerCase, type BodyIndex, type BodyIndexes } from './ion-lookup'
 import type { Ion } from './ions'
 import { isElementFormula } from './molar-mass'
 import { saltFrom, type Salt } from './salts'
@@ -14,36 +14,34 @@ export interface Spelt {
 interface Part {
   ion: Ion
   count: number
+  isCounted: boolean
   length: number
 }
-
-type Index = BodyIndexes['anions']
 
 const isSingle = (body: string) => /^[A-Z][a-z]?$/i.test(body)
 
 /** Every way in which the text may begin with one of the ions. */
-function beginnings(text: string, index: Index, isLoose: boolean): Part[] {
+export function beginnings(text: string, index: BodyIndex, isLoose: boolean): Part[] {
   const parts: Part[] = []
-  for (const [body, ions] of index) {
-    const grouped = `(${body})`
-    const start = text.startsWith(grouped) ? grouped : text.startsWith(body) ? body : null
+  for (const { body, grouped, ions } of index.values()) {
+    const start = text.startsWith(body) ? body : text.startsWith(grouped) ? grouped : null
     if (start === null) continue
     const digits = /^[1-9]\d*/.exec(text.slice(start.length))?.[0] ?? ''
     for (const ion of ions) {
-      parts.push({ ion, count: 1, length: start.length })
-      if (digits && (isLoose || start === grouped || isSingle(body))) parts.push({ ion, count: Number(digits), length: start.length + digits.length })
+      parts.push({ ion, count: 1, isCounted: false, length: start.length })
+      if (digits && (isLoose || start === grouped || isSingle(body))) parts.push({ ion, count: Number(digits), isCounted: true, length: start.length + digits.length })
     }
   }
   return parts
 }
 
 /** The ions that the whole text may stand for. */
-function wholes(text: string, index: Index, isLoose: boolean): Part[] {
-  const parts: Part[] = (index.get(text) ?? []).map(ion => ({ ion, count: 1, length: text.length }))
+function wholes(text: string, index: BodyIndex, isLoose: boolean): Part[] {
+  const parts: Part[] = (index.get(text)?.ions ?? []).map(ion => ({ ion, count: 1, isCounted: false, length: text.length }))
   const match = /^(?:\((.+)\)|([^()]+?|.+\)))([1-9]\d*)?$/.exec(text)
   const body = match?.[1] ?? match?.[2]
   if (body && body !== text && (isLoose || match?.[1] || isSingle(body))) {
-    for (const ion of index.get(body) ?? []) parts.push({ ion, count: Number(match?.[3] || 1), length: text.length })
+    for (const ion of index.get(body)?.ions ?? []) parts.push({ ion, count: Number(match?.[3] || 1), isCounted: true, length: text.length })
   }
   return parts
 }

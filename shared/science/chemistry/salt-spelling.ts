@@ -10,15 +10,17 @@ interface Guess {
 }
 
 /** Signs that look alike count half an edit. */
-const lookalikes = ['i1l', 'o0', 's5', 'b8']
-const confusion = (a: string, b: string) => lookalikes.some(group => group.includes(a) && group.includes(b)) ? 0.5 : 1
+const lookalikes: Readonly<Record<string, string>> = { 1: 'l', i: 'l', 0: 'o', 5: 's', 8: 'b' }
+const shapeOf = (sign: string) => lookalikes[sign] ?? sign
+const confusion = (a: string, b: string) => shapeOf(a) === shapeOf(b) ? 0.5 : 1
+const shapesOf = (word: string) => lettersOf([...word].map(shapeOf).join(''))
 
 const elementsOf = (formula: string) => [...new Set(formula.match(/[A-Z][a-z]?/g))].sort().join(' ')
 
 const knownFormulas = ionPairs.map(([cation, anion]) => {
   const { formula } = saltFrom(cation, anion)
   const word = formula.toLowerCase()
-  return { cation, anion, word, letters: lettersOf(word), elements: elementsOf(formula) }
+  return { cation, anion, word, shapes: shapesOf(word), elements: elementsOf(formula) }
 })
 
 const knownNames = (names: ReadonlyMap<string, NamedIon>) => [...names].map(([word, named]) => ({ word, named, letters: lettersOf(word) }))
@@ -41,11 +43,11 @@ function guessFormula(formula: string): Salt | null {
   if (!/^[A-Za-z(][A-Za-z0-9()]{2,19}$/.test(formula)) return null
   const word = formula.toLowerCase()
   const limit = formulaLimit(word.length)
-  const letters = lettersOf(word)
+  const shapes = shapesOf(word)
   const elements = isElementFormula(formula) ? elementsOf(formula) : null
   const guesses: Guess[] = []
   for (const known of knownFormulas) {
-    if (!mayBeWithin(limit + 1, letters, known.letters)) continue
+    if (Math.abs(known.word.length - word.length) > limit || !mayBeWithin(Math.floor(limit), shapes, known.shapes)) continue
     const edits = editDistance(word, known.word, limit, confusion)
     const isOther = elements !== null && edits !== 0.5 && elements !== known.elements
     if (edits <= limit && !isOther) guesses.push({ salt: saltFrom(known.cation, known.anion), edits })
@@ -64,7 +66,7 @@ function nearIons(word: string, index: ReadonlyMap<string, NamedIon>, known: typ
   const limit = nameLimit(word.length)
   const letters = lettersOf(word)
   return known.flatMap(({ word: name, named, letters: others }) => {
-    if (!mayBeWithin(limit, letters, others)) return []
+    if (Math.abs(name.length - word.length) > limit || !mayBeWithin(limit, letters, others)) return []
     const edits = editDistance(word, name, limit)
     return edits <= limit ? [{ named, edits }] : []
   })

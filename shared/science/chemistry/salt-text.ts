@@ -14,7 +14,7 @@ export function tidy(text: string): string {
     .normalize('NFD').replace(/\p{M}/gu, '')
     .replace(/ø/gi, 'o').replace(/ß/g, 'ss')
     .replace(/\s+/g, ' ')
-    .replace(/^[\s;:]+|[\s.,;:]+$/g, '')
+    .replace(/^[\s;:"'“”„‚‘«»]+|[\s.,;:*†‡"'“”‘»«]+$/g, '')
 }
 
 const blankWords = new Set([
@@ -22,13 +22,19 @@ const blankWords = new Set([
   'water', 'purewater', 'milliqwater', 'milliq', 'diwater', 'deionisedwater', 'deionizedwater', 'distilledwater', 'wasser', 'reineswasser', 'reinstwasser',
   'eau', 'eaupure', 'agua', 'aguapura', 'vann', 'rentvann', 'h2o',
   'none', 'nosalt', 'noaddedsalt', 'withoutsalt', 'saltfree', 'nosaltadded', 'ohnesalz', 'salzfrei', 'keinsalz', 'ohne', 'keine', 'keines', 'sanssel', 'sinsal', 'utensalt', 'ingen', 'aucun', 'ninguno', 'ninguna',
-  'buffer', 'bufferonly', 'onlybuffer', 'purebuffer', 'puffer', 'nurpuffer', 'tampon', 'tamponseul', '0', 'zero', 'zerosalt',
+  'buffer', 'bufferonly', 'onlybuffer', 'purebuffer', 'puffer', 'nurpuffer', 'tampon', 'tamponseul', '0', '0m', '0mm', 'zero', 'zerosalt',
 ])
+
+/** What may stand beside a blank's name: 'Blank 2', 'blank A', 'water blank', 'blank run 3'. */
+const besideBlank = /^(?:[a-z]|[a-z]?\d+|nr|no|run|rep|solution|sample|probe)$/
 
 /** A solution without the salt: 'blank', 'Blank 2', 'no salt', 'Leerwert', 'H2O', '0'. */
 export function isBlank(tidied: string): boolean {
-  const key = tidied.toLowerCase().replace(/[\s.,;:()#/-]/g, '')
-  return blankWords.has(key) || (/^(?:blank|blk|blanc|blanco|blindwert|leerwert|blindprove|water|buffer)\d+$/.test(key))
+  const text = tidied.toLowerCase()
+  if (blankWords.has(text.replace(/[\s.,;:()#/-]/g, ''))) return true
+  const words = text.split(/[^a-z0-9]+|(?<=[a-z]{3})(?=\d)/).filter(Boolean)
+  const isNamed = (word: string) => word !== '0' && blankWords.has(word)
+  return words.some(isNamed) && words.every(word => isNamed(word) || besideBlank.test(word))
 }
 
 const waterCounts: Readonly<Record<string, number>> = {
@@ -46,6 +52,7 @@ const number = String.raw`\d+(?:[.,]\d+)?`
 const waterFormula = new RegExp(String.raw`^(.+?)(?:\s*([·.,*×x+(])\s*|\s+)(${number}|[xn])?\s*h2o\)?$`, 'i')
 const waterName = new RegExp(String.raw`^(.+?)[\s,(-]*(${Object.keys(waterCounts).join('|')}|${number}|[xn])?[\s-]*(?<!chlor)h[yi]dr(?:ate?|ato|atado)\)?$`, 'i')
 const withoutWater = /[\s,-]*\(?(?:anhydrous|anhydr\.|anhydrate?|anhydre|wasserfrei(?:es)?|vannfri(?:tt)?|anhidro)\)?[\s,-]*/i
+const grade = /[\s,]+\(?(?:p\.? ?a|acs|puriss|[>≥]? ?(?:9\d|100)(?:[.,]\d+)? ?%)\)?$/i
 const dissolved = /\s*\(?\baq\.?\)?$/i
 
 function countWaters(given: string | undefined, isSaid: boolean): number | null {
@@ -54,9 +61,9 @@ function countWaters(given: string | undefined, isSaid: boolean): number | null 
   return waterCounts[given.toLowerCase()] ?? Number(given.replace(',', '.'))
 }
 
-/** Parts a salt from its water: 'Na2SO4 x 10 H2O', 'NaClO4·H2O', 'sodium sulfate decahydrate', 'Natriumsulfat-Decahydrat'. */
+/** Parts a salt from its water, and from what says how pure it is: 'Na2SO4 x 10 H2O', 'NaClO4·H2O', 'sodium sulfate decahydrate', 'Natriumsulfat-Decahydrat'. */
 export function withoutCrystalWater(tidied: string): Crystal {
-  const text = tidied.replace(withoutWater, ' ').replace(dissolved, '').trim()
+  const text = tidied.replace(withoutWater, ' ').replace(dissolved, '').replace(grade, '').trim()
   const formula = waterFormula.exec(text)
   if (formula) {
     // 'NaClO4 x H2O' counts one; 'NaClO4·xH2O' and 'NaClO4 xH2O' leave it open.

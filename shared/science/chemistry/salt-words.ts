@@ -1,9 +1,9 @@
-import { anionsByName, cationsByName, nameKey, type NamedIon } from './ion-lookup'
+import { anionsByName, bodiesAsWritten, cationsByName, nameKey, type NamedIon } from './ion-lookup'
 import { anionOf, type Ion } from './ions'
-import type { Spelt } from './salt-formulas'
+import { beginnings, type Spelt } from './salt-formulas'
 import { saltFrom } from './salts'
 
-const connectors = /\b(?:de|of|av|von)\s+|\bd['’]\s*/gi
+const connectors = /\b(?:de|of|av|von)\s+|\bd['’]\s*|(?<=o\s)di\s+/gi
 const trivial: Readonly<Record<string, string>> = { tablesalt: 'sodiumchloride', commonsalt: 'sodiumchloride', kochsalz: 'sodiumchloride', bordsalt: 'sodiumchloride' }
 
 /** A salt's name as it is looked up. */
@@ -34,7 +34,7 @@ export function speltByNames(cation: NamedIon, anion: NamedIon): Spelt {
 
 function withCharge(key: string): NamedIon | undefined {
   const found = cationsByName.get(key)
-  if (found) return found
+  if (found || !key.includes('#')) return found
   const [, name = '', charge] = /^(.+)#(\d)$/.exec(key) ?? []
   const named = cationsByName.get(name)
   return named && named.ion.charge === Number(charge) ? named : undefined
@@ -60,4 +60,16 @@ function readIons(key: string, cationCount: number | null): Spelt | null {
     unbalanced ??= spelt
   }
   return unbalanced
+}
+
+/** Half formula, half name: Na sulfate, Na3citrate, K-thiocyanate, sodium SCN. */
+export function readSymbolAndName(text: string): Spelt | null {
+  for (const { ion, count, isCounted, length } of beginnings(text, bodiesAsWritten.cations, false)) {
+    const anion = anionsByName.get(nameKey(text.slice(length)))
+    if (anion) return speltByNames({ ion, count: isCounted ? count : null }, anion)
+  }
+  const [, name = '', formula = ''] = /^([a-z]+)[\s-]+(\S+)$/i.exec(text) ?? []
+  const cation = cationsByName.get(name.toLowerCase())
+  const [anion] = bodiesAsWritten.anions.get(formula)?.ions ?? []
+  return cation && anion ? speltByNames(cation, { ion: anion, count: null }) : null
 }
