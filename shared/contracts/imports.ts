@@ -39,6 +39,7 @@ export const columnContract = z.object({ ...columnFields, header: z.string() })
 export const problemContract = z.object({
   row: z.number().int().describe('as the file shows it'),
   column: z.number().int().nullable(),
+  columns: z.array(z.number().int()).optional().describe('every cell it speaks of, where there are several'),
   code: z.enum(problemCodes),
   tone: z.enum(problemTones),
   message: z.string(),

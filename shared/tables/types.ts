@@ -11,6 +11,8 @@ export interface GridCell {
   isDate?: boolean
   /** the formula behind a cached value; never run */
   formula?: string
+  /** true: the cell is part of a merged range and repeats what its first cell holds */
+  isMerged?: boolean
 }
 
 export interface GridRow {
@@ -22,11 +24,14 @@ export interface GridRow {
 
 export const tableFormats = ['csv', 'tsv', 'semicolon', 'whitespace', 'xlsx', 'paste'] as const
 export const encodings = ['utf-8', 'utf-16le', 'utf-16be', 'windows-1252'] as const
+export const delimiters = [',', ';', '\t', '|', 'space'] as const
 
 /** A file cut into cells; nothing is dropped but rows without any text. */
 export interface Grid {
   format: typeof tableFormats[number]
   encoding: typeof encodings[number] | null
+  /** what stands between the cells of a text; absent for a sheet */
+  delimiter?: typeof delimiters[number]
   sheets: string[]
   sheet: string | null
   rows: GridRow[]
@@ -84,6 +89,8 @@ export interface RowProblem {
   row: number
   /** index of the column; null: about the whole row */
   column: number | null
+  /** every cell it speaks of, where there are several */
+  columns?: number[]
   code: ProblemCode
   tone: typeof problemTones[number]
   /** a short finding, such as "Salt not known: NaSNC" */
@@ -127,7 +134,7 @@ export interface Answer { code: Question['code'], subject: string, value: string
 export interface TableChoices {
   sheet?: string
   encoding?: typeof encodings[number]
-  delimiter?: ',' | ';' | '\t' | '|' | 'space'
+  delimiter?: typeof delimiters[number]
   decimal?: '.' | ','
   /** row number of the header as the file shows it; 0: there is none */
   headerRow?: number
@@ -160,7 +167,7 @@ export interface FoundReading {
   /** K/min */
   rate: number | null
   ph: number | null
-  limit: 'exact' | 'below' | 'above'
+  limit: 'exact' | 'below' | 'above' | 'salt-precipitated'
   /** label of its batch; null: the batch of the whole table */
   batch: string | null
   /** YYYY-MM-DD */

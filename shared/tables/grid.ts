@@ -1,0 +1,61 @@
+import { joinDecimalCommas } from './decimal-commas'
+import { decodeText } from './decode'
+import { cutText, delimiterOf } from './delimiter'
+import type { Delimiter } from './records'
+import { refuseByMagic, refusePacked, refuseTooLarge } from './refusals'
+import { mostRows, TableError, type Grid, type TableChoices } from './types'
+
+const formats: Record<Delimiter, Grid['format']> = { ',': 'csv', '|': 'csv', ';': 'semicolon', '\t': 'tsv', 'space': 'whitespace' }
+
+const empty = () => new TableError('empty', 'The file is empty. Choose the file that holds the table, or paste the table.')
+
+const code = (character: string) => character.charCodeAt(0)
+const withoutMeaning = new Set([' ', ',', ';', '\t', '|', '\r'].map(code))
+
+/** Counts the lines that hold anything, so that a table far too long is refused before it is cut into cells. */
+function refuseManyLines(text: string): void {
+  if (text.includes('"')) return
+  let lines = 0
+  let hasText = false
+  for (let index = 0; index < text.length; index++) {
+    const character = text.charCodeAt(index)
+    if (character === code('\n') || character === code('\r')) {
+      if (hasText) lines++
+      hasText = false
+    }
+    else if (!hasText && !withoutMeaning.has(character)) hasText = true
+  }
+  refuseTooLarge(lines, 0)
+}
+
+/**
+ * Cuts a text file or a paste into cells; rows without any text are left out, their numbers are not given to others.
+ * @throws TableError empty, pdf, ods, old-xls, not-a-table, wrong-encoding, too-many-rows, too-many-columns
+ */
+export function gridOfText(source: Uint8Array | string, hint: { name?: string, isPaste?: boolean }, choices: TableChoices): Grid {
+  if (typeof source !== 'string') {
+    if (source.length === 0) throw empty()
+    refuseByMagic(source)
+    refusePacked(source)
+  }
+  const { text: decoded, encoding } = typeof source === 'string' ? { text: source, encoding: null } : decodeText(source, choices.encoding)
+  const text = decoded.replace(/^\uFEFF/, '').replace(/[\u001A\u0000]+$/, '')
+  if (text.trim() === '') throw empty()
+  refuseManyLines(text)
+  const delimiter = choices.delimiter ?? delimiterOf(text) ?? ','
+  const records = cutText(text, delimiter, Number.MAX_SAFE_INTEGER)
+  const cut = delimiter === ',' ? joinDecimalCommas(records) : records
+  const rows = cut.map((cells, index) => ({ number: index + 1, cells: cells.map(cell => ({ text: cell })), isHidden: false }))
+    .filter(row => row.cells.some(cell => cell.text.trim() !== ''))
+  refuseTooLarge(rows.length, widthWithText(cut))
+  return { format: hint.isPaste ? 'paste' : formats[delimiter], encoding, delimiter, sheets: [], sheet: null, rows }
+}
+
+/** Columns up to the last that holds any text; spreadsheets write hundreds of empty ones behind it. */
+function widthWithText(records: readonly string[][]): number {
+  return records.reduce((widest, cells) => {
+    let width = cells.length
+    while (width > widest && cells[width - 1]?.trim() === '') width--
+    return Math.max(widest, width)
+  }, 0)
+}
