@@ -18,6 +18,8 @@ const meaningsOfUnits: Record<Unit['of'], ColumnMeaning> = { concentration: 'con
 
 function meaningFor(name: string, unit: Unit | null, salt: string | null): ColumnMeaning {
   const meaning = meaningOf(name)
+  // "NaCl (mM)" and "salt / M" hold amounts of a salt, not its name.
+  if (unit?.of === 'concentration' && (meaning === null || meaning === 'salt')) return 'concentration'
   if (meaning) return meaning
   if (salt !== null || directionOf(name) !== null) return 'cloud-point'
   return unit ? meaningsOfUnits[unit.of] : 'kept'

@@ -8,7 +8,7 @@ export function tidy(text: string): string {
   return text.replace(invisible, '').replace(spaces, ' ').replace(/[\u2212\uFE63\uFF0D]/g, '-').replace(/\s+/g, ' ').trim()
 }
 
-const letters: Readonly<Record<string, string>> = { 'ß': 'ss', 'ø': 'o', 'æ': 'ae', 'œ': 'oe', 'đ': 'd', 'ł': 'l' }
+const letters: Readonly<Record<string, string>> = { ß: 'ss', ø: 'o', æ: 'ae', œ: 'oe', đ: 'd', ł: 'l' }
 const folded = new Map<string, string>()
 
 /** A word as it is compared: small letters without accents. Remembered, because tables repeat themselves. */

@@ -3,7 +3,7 @@ import { decodeText } from './decode'
 import { cutText, delimiterOf } from './delimiter'
 import type { Delimiter } from './records'
 import { refuseByMagic, refusePacked, refuseTooLarge } from './refusals'
-import { mostRows, TableError, type Grid, type TableChoices } from './types'
+import { TableError, type Grid, type TableChoices } from './types'
 
 const formats: Record<Delimiter, Grid['format']> = { ',': 'csv', '|': 'csv', ';': 'semicolon', '\t': 'tsv', 'space': 'whitespace' }
 
@@ -39,7 +39,8 @@ export function gridOfText(source: Uint8Array | string, hint: { name?: string, i
     refusePacked(source)
   }
   const { text: decoded, encoding } = typeof source === 'string' ? { text: source, encoding: null } : decodeText(source, choices.encoding)
-  const text = decoded.replace(/^\uFEFF/, '').replace(/[\u001A\u0000]+$/, '')
+  // Old programs end a text with control-Z.
+  const text = decoded.replace(/^\uFEFF/, '').replace(/\p{Cc}+$/u, end => end.replace(/[^\r\n\t]/g, ''))
   if (text.trim() === '') throw empty()
   refuseManyLines(text)
   const delimiter = choices.delimiter ?? delimiterOf(text) ?? ','

@@ -11,14 +11,14 @@ const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
   ['rate', /\brate\b|heizrate|kuhlrate|\bvitesse\b|velocidad|hastighet|\bramp(?:e)?\b/],
   ['samples', /^n$|^n [a-z]*$|\bsamples\b|replicates|^(?:number|no|nr|num) of|^anzahl|^antall|^nombre\b|^numero\b|^count$|^proben$|^prover$|messungen|^reps$/],
   ['replicate', /^rep$|^rep ?(?:no|nr|#)|^replicate|^replikat|^wiederholung|^parallel+|^essai|^repetition|^repeticion|^replica|^aliquot|^triplicate|^vial$/],
-  ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
+  ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev|dt|δt)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
   ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$|^ionic strength/],
   ['batch', /batch|^charge$|^charge\b|^lot\b|^lote$|^parti|messreihe|^serie$|^series$|^run\b|^lauf$|^set$|^tanda$/],
   ['date', /^date|datum|^dato|fecha|^measured|gemessen|^malt|mesure le|medido|^day$|^tag$|^dag$|^jour$|^dia$|^when$/],
   ['direction', /^direction|richtung|^retning|^sens\b|direccion|^branch|^scan$|^mode$|up ?\/ ?down|heating ?\/ ?cooling|^zweig$/],
   ['note', /^notes?\b|remark|comment|kommentar|bemerkung|anmerkung|^notiz|merknad|observ|^notas?\b|^info|^hinweis/],
   ['cloud-point', /cloud|trubung|turbidez|turbidity|turbidit|enturbiamiento|trouble|punto de nube|uklar|skypunkt|blakning|\blcst\b|\bucst\b|temp|^t$|^t ?\d{1,2}$|^t[ (]|^t-|^tcp|^tcloud|^cp$|^cp |^tc$|^tph|^tm$|^tt$|^y$|^θ$|^ϑ$|transition|ubergang|demix/],
-  ['salt', /salt|salz|^sels?$|^sal$|^sales$|^anion|^ion$|^compound|verbindung|^stoff|electrolyte|elektrolyt|^additiv|^zusatz|^formula|^formel|^formule/],
+  ['salt', /salt|salz|^sels?\b|^sal$|^sales$|^anion|^ion$|^compound|verbindung|^stoff|electrolyte|elektrolyt|^additiv|^zusatz|^formula|^formel|^formule/],
 ]
 
 /** @param name folded, without its unit */

@@ -16,7 +16,7 @@ export interface Quantity {
   isFormulaLike: boolean
 }
 
-export type QuantityReading = Quantity | { kind: 'empty' | 'not-determined' | 'formula-like' | 'text' }
+export type QuantityReading = Quantity | { kind: 'empty' | 'not-determined' | 'formula-like' | 'text' | 'date' }
 
 const notDetermined = new Set([
   'n.d.', 'nd', 'n.d', 'n/d', 'n/a', 'n.a.', 'na', 'nan', '-', '--', '---', '–', '—', '/', '?', 'null', 'none', 'not determined', 'not measured', 'n.m.', 'nm',
@@ -83,6 +83,6 @@ function readMarked(text: string, read: Read): QuantityReading {
   const { text: bare, unit } = cutUnit(rest)
   const number = read(bare.trim())
   if (number) return { kind: 'number', number, mark: number.mark, isGrouped: number.isGrouped, uncertainty: null, unit, ...about }
-  const isFormula = isFormulaLike && !text.startsWith('\'') || /^[+-]\s?(?:[A-Za-z(]|\d.*[-+*/(])/.test(text)
+  const isFormula = (isFormulaLike && !text.startsWith('\'')) || /^[+-]\s?(?:[A-Za-z(]|\d.*[-+*/(])/.test(text)
   return { kind: isFormula ? 'formula-like' : 'text' }
 }

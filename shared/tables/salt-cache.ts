@@ -1,4 +1,4 @@
-import { readSalt, type SaltReading } from '#shared/science/chemistry/salt-names'
+import { readSalt, type SaltReading } from '#shared/science/chemistry/read-salt'
 import { tidy } from './fold'
 
 const known = new Map<string, SaltReading>()
