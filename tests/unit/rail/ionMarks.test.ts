@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { furtherAnions } from '#shared/science/chemistry/ions'
 import { halfPath, ionMarks, markOf, markShapes, outlinePath } from '~~/components/chart/ionMarks'
 
 describe('ionMarks', () => {
@@ -12,8 +13,11 @@ describe('ionMarks', () => {
     expect(fills).toEqual([...fills].sort((a, b) => ['filled', 'half', 'open'].indexOf(a) - ['filled', 'half', 'open'].indexOf(b)))
   })
 
-  it('marks an anion outside the table with a shape no other uses', () => {
-    expect(ionMarks.map(mark => mark.shape)).not.toContain(markOf('C2H3O2^-').shape)
+  it('marks an anion outside the table with a shape no other uses, in a colour outside the scale', () => {
+    for (const { formula } of furtherAnions) {
+      expect(ionMarks.map(mark => mark.shape)).not.toContain(markOf(formula).shape)
+      expect(ionMarks.map(mark => mark.variable)).not.toContain(markOf(formula).variable)
+    }
   })
 
   it.each(markShapes)('draws a closed path for a %s', (shape) => {
