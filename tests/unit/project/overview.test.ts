@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { attentionOf, findingsOf } from '#shared/science/pooling/findings'
 import { acrossGroups, arrange, seriesTitle, shown } from '~~/components/project/overview/arrange'
 import { sharedAxes } from '~~/components/project/overview/axes'
+import { apartByCation } from '~~/components/project/overview/cations'
 import { comparedOf } from '~~/components/project/overview/compared'
 import { findingNote } from '~~/components/project/overview/findingNotes'
 import { panelDrawing, remarkOf } from '~~/components/project/overview/panel'
@@ -54,6 +55,29 @@ describe('arrange', () => {
     expect(rows.map(row => row.ion).sort()).toEqual(['I^-', 'NO3^-'])
     expect(columns).toHaveLength(6)
     expect(rows.flatMap(row => row.cells).filter(Boolean)).toHaveLength(3)
+  })
+})
+
+describe('apartByCation', () => {
+  const potassium = { ...at('Norrvik', 'spring', 'Cl^-'), id: 'potassium', salt: { formula: 'KCl', name: 'potassium chloride', anion: 'Cl^-', cation: 'K^+' } }
+
+  it('leaves a project of one cation as it is', () => {
+    expect(apartByCation(series)).toEqual(series)
+    const allPotassium = series.map(one => ({ ...one, salt: { ...one.salt, cation: 'K^+' } }))
+    expect(apartByCation(allPotassium)).toEqual(allPotassium)
+  })
+
+  it('gives a salt of another cation a place of its own, so that none is hidden or pooled', () => {
+    const apart = apartByCation([...series, potassium])
+    const { rows } = arrange(apart, apart, 'anion', railEntries(apart, 0.3).map(({ ion }) => ion))
+    expect(rows.flatMap(row => row.cells).filter(Boolean)).toHaveLength(series.length + 1)
+    expect(rows.find(row => row.ion === 'KCl')?.cells.filter(Boolean).map(one => one!.id)).toEqual(['potassium'])
+    expect(railEntries(apart, 0.3).find(({ ion }) => ion === 'Cl^-')).toEqual(railEntries(series, 0.3).find(({ ion }) => ion === 'Cl^-'))
+  })
+
+  it('takes sodium as usual where as many series have another cation', () => {
+    const sodium = at('Norrvik', 'spring', 'Cl^-')
+    expect(apartByCation([potassium, sodium]).map(({ salt }) => salt.anion)).toEqual(['KCl', 'Cl^-'])
   })
 })
 
