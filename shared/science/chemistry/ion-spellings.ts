@@ -1,5 +1,5 @@
 /**
- * Other ways to write an ion. `stems` take the endings of its English name in English, German, Norwegian, French and Spanish;
+ * Other ways to write an ion. `stems` take the endings of its English name in English, German, Norwegian, French, Spanish and Italian;
  * `words` are whole names; `bodies` are other formulas without charge. Lower case, without accents, spaces and hyphens. Common practice.
  */
 export interface Spelling {

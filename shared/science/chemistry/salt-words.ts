@@ -42,7 +42,7 @@ function withCharge(key: string): NamedIon | undefined {
 
 const basicities: Readonly<Record<string, number>> = { monobasic: 1, dibasic: 2, tribasic: 3 }
 
-/** A name in English, German, Norwegian, French or Spanish, cation first or last. */
+/** A name in English, German, Norwegian, French, Spanish or Italian, cation first or last. */
 export function readName(key: string): Spelt | null {
   const basicity = Object.keys(basicities).find(word => key.includes(word))
   return basicity ? readIons(key.replace(basicity, ''), basicities[basicity]!) : readIons(key, null)
