@@ -48,7 +48,9 @@ export function marquardt(objective: Objective): Marquardt {
         },
       })
       if (!(outcome.parameterError < before)) return null
-      return Float64Array.from(outcome.parameterValues, (value, j) => value / scales[j]!)
+      const moved = new Float64Array(size)
+      for (let j = 0; j < size; j++) moved[j] = outcome.parameterValues[j]! / scales[j]!
+      return moved
     }
     catch {
       // A Jacobian that is not finite throws out of the linear algebra: the same as a step that does not help.

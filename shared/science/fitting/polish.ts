@@ -23,7 +23,7 @@ const settledOffset = 1e-12
 const settledStep = 1e-13
 const dependentColumns = 1e-14
 
-export function examine(objective: Objective, point: Float64Array, step: Float64Array): Stationary {
+function examine(objective: Objective, point: Float64Array, step: Float64Array): Stationary {
   const { readings: n, size: p } = objective
   const residuals = new Float64Array(n)
   const jacobian = new Float64Array(n * p)

@@ -32,7 +32,7 @@ export interface ProfileMinimum {
 /** Share of a column's square that must be left after projection for it to be a direction of its own. */
 const smallestRest = 1e-26
 /** On ln K; the polish finds the remaining digits. */
-const rootTolerance = 1e-10
+const rootTolerance = 1e-13
 const gridStep = Math.LN10 / 8
 const reach = 3 * Math.LN10
 /** Largest x beside the smallest positive x that the grid follows. */
@@ -44,49 +44,51 @@ export class BindingProfile {
   derivative = 0
 
   private readonly n: number
-  /** Orthonormal basis of the columns that do not depend on K; zeros where there is none. */
-  private readonly first: Float64Array
-  private readonly second: Float64Array
-  private coefficient = 0
-  private readonly target: Float64Array
-  private readonly column: Float64Array
-  private readonly slopes: Float64Array
   private readonly hasLevel: boolean
-  /** Numerators of the two bases, whitened; the denominator of both is 1 + K·x. */
-  private readonly lowTop: Float64Array
-  private readonly highTop: Float64Array
+  private readonly hasSlope: boolean
+  private readonly columns: Columns
+  private readonly lengthOfFirst: number
+  private readonly lengthOfSecond: number
+  private readonly slopeOnFirst: number
+  private readonly targetOnFirst: number
+  private readonly targetOnSecond: number
+  /** Of the latest basis column: its coefficient and what was taken off it. */
+  private coefficient = 0
+  private onFirst = 0
+  private onSecond = 0
 
   constructor(private readonly data: ScaledData, linear: LinearPart) {
     const { n, x, y, root } = data
     this.n = n
     this.hasLevel = linear.level === null
-    const hasSlope = linear.slope === null
-    this.column = new Float64Array(n)
-    this.slopes = new Float64Array(n)
-    this.target = new Float64Array(n)
-    this.lowTop = new Float64Array(n)
-    this.highTop = new Float64Array(n)
+    this.hasSlope = linear.slope === null
+    const { target, lowTop, highTop, first, second } = this.columns = columnsOf(n)
     for (let i = 0; i < n; i++) {
-      this.target[i] = (y[i]! - (linear.level ?? 0) - (linear.slope ?? 0) * x[i]!) * root[i]!
-      this.lowTop[i] = (hasSlope ? x[i]! * x[i]! : x[i]!) * root[i]!
-      this.highTop[i] = (this.hasLevel ? 1 : x[i]!) * root[i]!
+      const weighted = x[i]! * root[i]!
+      target[i] = y[i]! * root[i]! - (linear.level ?? 0) * root[i]! - (linear.slope ?? 0) * weighted
+      first[i] = this.hasLevel ? root[i]! : 0
+      second[i] = this.hasSlope ? weighted : 0
+      lowTop[i] = this.hasSlope ? x[i]! * weighted : weighted
+      highTop[i] = this.hasLevel ? root[i]! : weighted
     }
-    this.first = this.hasLevel ? unit(root.slice()) : new Float64Array(n)
-    const slope = new Float64Array(n)
-    if (hasSlope) for (let i = 0; i < n; i++) slope[i] = x[i]! * root[i]!
-    this.second = unit(slope, this.first)
-    project(this.target, this.first)
-    project(this.target, this.second)
+    this.lengthOfFirst = normalize(first, square(first))
+    const before = square(second)
+    this.slopeOnFirst = project(second, first)
+    // Twice: the second pass removes what rounding left in the first.
+    project(second, first)
+    this.lengthOfSecond = normalize(second, before)
+    this.targetOnFirst = project(target, first)
+    this.targetOnSecond = project(target, second)
   }
 
   /** Sum of squares with no binding term at all. */
   get sumWithout(): number {
-    return square(this.target)
+    return square(this.columns.target)
   }
 
   /** Sets `sum` and `derivative` at a value of ln K. */
   at(logK: number): number {
-    const { n, column, slopes, target } = this
+    const { n, columns: { column, slopes, target } } = this
     this.derivative = this.slopeAt(logK)
     const coefficient = this.coefficient
     let sum = 0
@@ -103,9 +105,9 @@ export class BindingProfile {
 
   /** The derivative by ln K without the residuals: less exact near a minimum, enough to see its sign on the grid. */
   private slopeAt(logK: number): number {
-    const { n, column, slopes, target, data: { x }, first, second } = this
+    const { n, data: { x }, columns: { column, slopes, target, first, second, lowTop, highTop } } = this
     const k = Math.exp(logK)
-    const top = k < 1 ? this.lowTop : this.highTop
+    const top = k < 1 ? lowTop : highTop
     let onFirst = 0
     let onSecond = 0
     for (let i = 0; i < n; i++) {
@@ -116,6 +118,8 @@ export class BindingProfile {
       onFirst += g * first[i]!
       onSecond += g * second[i]!
     }
+    this.onFirst = onFirst
+    this.onSecond = onSecond
     let gg = 0
     let gy = 0
     let gs = 0
@@ -137,19 +141,32 @@ export class BindingProfile {
    * there are none and the level is free, a term in 1/x.
    */
   limit(end: 'zero' | 'infinity'): number {
-    const { n, column, target, data: { x, root } } = this
+    const { n, data: { x, root }, columns: { column, target, first, second, lowTop } } = this
     const hasStep = !this.hasLevel || x.includes(0)
     for (let i = 0; i < n; i++) {
-      column[i] = end === 'zero' ? this.lowTop[i]! : root[i]! * (hasStep ? Number(x[i]! > 0) : 1 / x[i]!)
+      column[i] = end === 'zero' ? lowTop[i]! : root[i]! * (hasStep ? Number(x[i]! > 0) : 1 / x[i]!)
     }
     const before = square(column)
-    project(column, this.first)
-    project(column, this.second)
+    project(column, first)
+    project(column, second)
     const gg = square(column)
     const coefficient = gg > smallestRest * before ? dot(column, target) / gg : 0
     let sum = 0
     for (let i = 0; i < n; i++) sum += (target[i]! - coefficient * column[i]!) ** 2
     return sum
+  }
+
+  /** The linear parameters that go with a value of ln K; a held one is given as 0. */
+  linearAt(logK: number): { level: number, slope: number, saturation: number } {
+    this.at(logK)
+    const { coefficient, hasLevel, hasSlope } = this
+    const k = Math.exp(logK)
+    const slope = this.lengthOfSecond > 0 ? (this.targetOnSecond - coefficient * this.onSecond) / this.lengthOfSecond : 0
+    const level = this.lengthOfFirst > 0 ? (this.targetOnFirst - coefficient * this.onFirst - slope * this.slopeOnFirst) / this.lengthOfFirst : 0
+    // From the basis column back to the binding term, whose line or level the basis had taken out.
+    if (k < 1 && hasSlope) return { level, slope: slope + coefficient / k, saturation: -coefficient / (k * k) }
+    if (k >= 1 && hasLevel) return { level: level + coefficient, slope, saturation: -coefficient }
+    return { level, slope, saturation: coefficient / k }
   }
 
   /** Lowest point over the range, limits and bounds included. */
@@ -213,17 +230,36 @@ function dot(a: Float64Array, b: Float64Array): number {
   return sum
 }
 
-/** A column at unit length, off another one; zeros where nothing is left. Twice: the second pass removes rounding. */
-function unit(column: Float64Array, other?: Float64Array): Float64Array {
-  const before = square(column)
-  if (other) for (let pass = 0; pass < 2; pass++) project(column, other)
+/** Brings a column to unit length and gives back what it was; zeros where nothing of its former square is left. */
+function normalize(column: Float64Array, before: number): number {
   const after = square(column)
-  const scale = after > smallestRest * before ? 1 / Math.sqrt(after) : 0
+  const length = after > smallestRest * before ? Math.sqrt(after) : 0
+  const scale = length > 0 ? 1 / length : 0
   for (let i = 0; i < column.length; i++) column[i]! *= scale
-  return column
+  return length
 }
 
-function project(v: Float64Array, onto: Float64Array): void {
+/** Takes off a column its part along a unit one, and gives back that part. */
+function project(v: Float64Array, onto: Float64Array): number {
   const amount = dot(v, onto)
   for (let i = 0; i < v.length; i++) v[i]! -= amount * onto[i]!
+  return amount
+}
+
+/** What a profile keeps of its readings, and the room it works in. */
+interface Columns {
+  target: Float64Array
+  column: Float64Array
+  slopes: Float64Array
+  /** Orthonormal basis of the columns that do not depend on K; zeros where there is none. */
+  first: Float64Array
+  second: Float64Array
+  /** Numerators of the two bases, whitened; the denominator of both is 1 + K·x. */
+  lowTop: Float64Array
+  highTop: Float64Array
+}
+
+function columnsOf(n: number): Columns {
+  const column = () => new Float64Array(n)
+  return { target: column(), column: column(), slopes: column(), first: column(), second: column(), lowTop: column(), highTop: column() }
 }

@@ -48,7 +48,9 @@ export function scaleData(x: ArrayLike<number>, y: ArrayLike<number>, weights: A
 
 /** Size of one scaled unit of each parameter on the original axes. */
 export function parameterUnits(model: Model, data: ScaledData): Float64Array {
-  return Float64Array.from(model.parameters, ({ yPower, xPower }) => data.yScale ** yPower * data.xScale ** xPower)
+  const units = new Float64Array(model.parameters.length)
+  model.parameters.forEach(({ yPower, xPower }, j) => (units[j] = data.yScale ** yPower * data.xScale ** xPower))
+  return units
 }
 
 export function toScaled(model: Model, data: ScaledData, index: number, value: number): number {

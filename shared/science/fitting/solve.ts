@@ -4,8 +4,8 @@ import { strongBinding, strongBindingPlateau, weakBinding, weakBindingLine } fro
 import { descendFrom, stopReasonOf, type Bounds } from './descend'
 import { columnLengths, marquardt } from './marquardt'
 import { modelObjective, type Objective } from './objective'
-import { examine, polish, type Stationary } from './polish'
-import { BindingProfile, profileRange, type ProfileMinimum } from './profile'
+import { polish, type Stationary } from './polish'
+import { BindingProfile, profileRange } from './profile'
 import type { ScaledData } from './scale'
 import { searchShapes } from './search'
 import type { StopReason } from './types'
@@ -64,7 +64,7 @@ export function canProfile({ model, held }: Problem): boolean {
   return k >= 0 && Number.isNaN(held[k]) && Number.isNaN(held[bmax]) && indexOf(model, 'h') < 0
 }
 
-function freeCount({ held }: Problem): number {
+function freeCount({ held }: Pick<Problem, 'held'>): number {
   let count = 0
   for (const value of held) if (Number.isNaN(value)) count++
   return count
@@ -84,24 +84,16 @@ function solveByProfile(problem: Problem): Solution {
   const minimum = profile.minimum(profileRange(problem.data, problem.lower[k]!, problem.upper[k]!))
   if (typeof minimum.at === 'string') return solveLimit(problem, minimum.at)
   if (minimum.isAtBound) return solveAtBound(problem, k, Math.exp(minimum.at))
-  return refine(problem, startFrom(problem, minimum))
+  return refine(problem, startFrom(problem, profile, minimum.at))
 }
 
-/** The linear parameters at a given K: one Gauss–Newton step, exact because the model is linear in them. */
-function startFrom(problem: Problem, minimum: ProfileMinimum): Float64Array {
-  const k = indexOf(problem.model, 'K')
-  const value = Math.exp(minimum.at as number)
-  const held = problem.held.slice()
-  held[k] = value
-  const objective = modelObjective(problem.model, problem.data, held)
-  const step = new Float64Array(objective.size)
-  examine(objective, new Float64Array(objective.size), step)
-  const start = new Float64Array(objective.size + 1)
-  let from = 0
-  let to = 0
-  for (let j = 0; j < held.length; j++) {
-    if (Number.isNaN(problem.held[j])) start[to++] = j === k ? value : -step[from++]!
-  }
+/** The free parameters at the lowest point of the profile, in the model's order. */
+function startFrom({ model, held }: Problem, profile: BindingProfile, logK: number): Float64Array {
+  const { level, slope, saturation } = profile.linearAt(logK)
+  const values: Readonly<Record<string, number>> = { T0: level, c: slope, Bmax: saturation, K: Math.exp(logK) }
+  const start = new Float64Array(freeCount({ held }))
+  let at = 0
+  for (let j = 0; j < held.length; j++) if (Number.isNaN(held[j])) start[at++] = values[model.parameters[j]!.name]!
   return start
 }
 
@@ -121,7 +113,8 @@ function refine(problem: Problem, start: Float64Array): Solution {
 function finish(problem: Problem, estimated: Model, objective: ReturnType<typeof modelObjective>, stationary: Stationary, end: End | null, stopReason: StopReason): Solution {
   const values = objective.complete(stationary.point).slice()
   const held = end ? limitHeld(problem, estimated) : problem.held
-  const columns = Array.from(values.keys()).filter(j => Number.isNaN(held[j]))
+  const columns: number[] = []
+  for (let j = 0; j < held.length; j++) if (Number.isNaN(held[j])) columns.push(j)
   return { problem, estimated, values, columns, stationary, objective, sum: stationary.sum, end, stopReason }
 }
 
