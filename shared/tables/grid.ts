@@ -1,7 +1,7 @@
-import { joinDecimalCommas } from './decimal-commas'
-import { decodeText } from './decode'
-import { cutText, delimiterOf } from './delimiter'
-import type { Delimiter } from './records'
+import { joinDecimalCommas } from './text/decimal-commas'
+import { decodeText } from './text/decode'
+import { cutText, delimiterOf } from './text/delimiter'
+import type { Delimiter } from './text/records'
 import { refuseByMagic, refusePacked, refuseTooLarge } from './refusals'
 import { TableError, type Grid, type TableChoices } from './types'
 

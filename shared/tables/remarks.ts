@@ -1,14 +1,15 @@
-import type { Head } from './head'
-import type { Plan } from './plan'
+import type { Head } from './columns/head'
+import type { Plan } from './columns/plan'
+import type { GridCell } from './types'
 
 const counted = (number: number, one: string, many: string) => `${number} ${number === 1 ? one : many}`
 
 /** Sentences about the whole file. */
 export function remarksOf({ header, below }: Head, plan: Plan): string[] {
   const hidden = below.filter(row => row.isHidden).length
-  const cells = below.flatMap(row => row.cells)
-  const formulas = cells.filter(cell => cell.formula !== undefined).length
-  const merged = cells.filter(cell => cell.isMerged).length
+  const count = (test: (cell: GridCell) => boolean) => below.reduce((sum, { cells }) => cells.reduce((rest, cell) => test(cell) ? rest + 1 : rest, sum), 0)
+  const formulas = count(cell => cell.formula !== undefined)
+  const merged = count(cell => cell.isMerged ?? false)
   const remarks: string[] = []
   if (!header) remarks.push('No header was found. What the columns hold is guessed from their numbers: check each of them.')
   if (hidden > 0) remarks.push(`${counted(hidden, 'row is', 'rows are')} hidden in the sheet and read like the others.`)

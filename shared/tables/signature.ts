@@ -1,4 +1,4 @@
-import { fold } from './fold'
+import { fold } from './cells/fold'
 import type { Understanding } from './types'
 
 /** Headings in one line, the same for every file of one kind: a lab's recipe is found by it. */

@@ -1,0 +1,31 @@
+import { readSalt, type SaltReading } from '#shared/science/chemistry/read-salt'
+import { tidy } from './fold'
+
+const known = new Map<string, SaltReading>()
+
+/** Numbers and long remarks are no salts; looking for the nearest one would take its time. */
+const noSalt: SaltReading = { kind: 'unknown', problem: 'unknown', suggestion: null }
+const mayBeSalt = (text: string) => text === '0' || (text.length <= 100 && /\p{L}/u.test(text))
+
+/** A salt however written; remembered, because tables repeat their salts. */
+export function saltOf(text: string): SaltReading {
+  const written = tidy(text)
+  if (!mayBeSalt(written)) return noSalt
+  const before = known.get(written)
+  if (before) return before
+  const reading = readSalt(written)
+  if (known.size > 5_000) known.clear()
+  known.set(written, reading)
+  return reading
+}
+
+/** The salt that a heading, a file name or a remark names among other words; null where there is none. */
+export function saltAmong(text: string): string | null {
+  const words = tidy(text).split(/[\s_,;:/|[\]="]+|(?<!^)\((?=[A-Z])|\)$/).filter(word => word.length > 1)
+  const pairs = words.slice(1).map((word, index) => `${words[index]} ${word}`)
+  for (const candidate of [tidy(text), ...pairs, ...words]) {
+    const reading = candidate.length > 40 ? null : saltOf(candidate)
+    if (reading?.kind === 'salt') return reading.salt.formula
+  }
+  return null
+}

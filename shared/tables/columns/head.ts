@@ -1,0 +1,95 @@
+import { fold } from '../cells/fold'
+import { headerText } from './header-text'
+import { directionOf, meaningOf } from './header-words'
+import { readQuantity } from '../cells/quantity'
+import { saltAmong, saltOf } from '../cells/salt-cache'
+import type { Grid, GridRow, TableChoices } from '../types'
+import { unitOf } from '../cells/units'
+
+/** A table cut into what stands above its readings and the rows below. */
+export interface Head {
+  header: GridRow | null
+  units: GridRow | null
+  /** a row above the header that names the salt or branch of several columns at once */
+  group: GridRow | null
+  preamble: GridRow[]
+  below: GridRow[]
+}
+
+/** A head that begins later than this is none. */
+const deepestHead = 80
+
+const filled = (row: GridRow) => row.cells.filter(cell => cell.text.trim() !== '')
+const isNumber = (text: string) => readQuantity(text, 'both', false).kind === 'number'
+const numbersIn = (row: GridRow | undefined) => row ? filled(row).filter(cell => cell.value !== undefined || isNumber(cell.text)).length : 0
+
+/** How much a cell looks like a heading. Salts head columns, too, but more of them stand in rows. */
+function headingWeight(text: string): number {
+  const { name, unit } = headerText(text)
+  const meaning = meaningOf(name)
+  if ((meaning !== null && meaning !== 'kept') || (name === '' && unit !== null) || directionOf(name) !== null) return 1
+  return saltOf(text).kind === 'salt' ? 0.5 : 0
+}
+
+/** A row of nothing but units, such as M | °C | K. */
+function isUnitsRow(row: GridRow | undefined): boolean {
+  if (!row) return false
+  const texts = filled(row).map(cell => cell.text.replace(/^\s*[([]|[)\]]\s*$/g, '').trim())
+  const isUnit = (text: string) => unitOf(text) !== null || /^(?:-|–|1|text|n\/a)$/i.test(text)
+  return texts.some(text => unitOf(text) !== null) && texts.every(isUnit)
+}
+
+function scoreOf(rows: readonly GridRow[], index: number): number {
+  const row = rows[index]
+  const cells = row ? filled(row) : []
+  if (!row || cells.length < 2 || (cells.length === 2 && cells[0]?.text.trim().endsWith(':'))) return 0
+  const numbers = numbersIn(row)
+  const headings = cells.reduce((sum, cell) => sum + headingWeight(cell.text), 0)
+  const below = rows[isUnitsRow(rows[index + 1]) ? index + 2 : index + 1]
+  const isAboveNumbers = numbersIn(below) >= 2
+  const remark = cells[0]?.text.trim().startsWith('#') ? 3 : 0
+  if (headings === 0 && !(isAboveNumbers && numbers === 0)) return 0
+  return headings - 2 * numbers + (isAboveNumbers ? 1.5 : 0) - remark - (isUnitsRow(row) ? 1 : 0)
+}
+
+function findHeader(rows: readonly GridRow[]): number {
+  let best = { index: -1, score: 1 }
+  for (let index = 0; index < Math.min(rows.length, deepestHead); index++) {
+    const score = scoreOf(rows, index)
+    if (score > best.score) best = { index, score }
+  }
+  return best.index
+}
+
+/** A salt or branch that may stand over several columns. */
+export function isGroupHeading(text: string): boolean {
+  return text.length < 40 && !isNumber(text) && (saltAmong(text) !== null || directionOf(fold(text)) !== null)
+}
+
+/** The row right above a header is head, too, when each of its words is a salt or branch, or the heading of a column that has none. */
+function isGroupRow(row: GridRow | undefined, header: GridRow | undefined): boolean {
+  if (!row || !header || row.number !== header.number - 1) return false
+  const texts = row.cells.map(cell => cell.text.trim())
+  const isGroup = texts.map(text => text !== '' && isGroupHeading(text))
+  const isFitting = texts.every((text, index) => text === '' || isGroup[index] || (header.cells[index]?.text.trim() === '' && headingWeight(text) > 0))
+  return isFitting && isGroup.slice(1).some(Boolean)
+}
+
+function chosenIndex(rows: readonly GridRow[], number: number): number {
+  return rows.findIndex(row => row.number === number)
+}
+
+/** Finds the header, the units below it and what stands above, or takes them from a person's choice. */
+export function headOf({ rows }: Grid, { headerRow, unitsRow }: TableChoices): Head {
+  const header = headerRow === undefined ? findHeader(rows) : chosenIndex(rows, headerRow)
+  if (header < 0) {
+    const first = Math.max(0, rows.findIndex(row => numbersIn(row) > 0))
+    return { header: null, units: null, group: null, preamble: rows.slice(0, first), below: rows.slice(first) }
+  }
+  const next = rows[header + 1]
+  const units = unitsRow === undefined ? (isUnitsRow(next) ? next : undefined) : rows[chosenIndex(rows, unitsRow)]
+  const above = rows[header - 1]
+  const group = isGroupRow(above, rows[header]) ? above : undefined
+  const preamble = rows.slice(0, group ? header - 1 : header).filter(row => row !== units)
+  return { header: rows[header] ?? null, units: units ?? null, group: group ?? null, preamble, below: rows.slice(header + 1).filter(row => row !== units) }
+}
