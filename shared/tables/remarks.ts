@@ -2,6 +2,9 @@ import type { Head } from './columns/head'
 import type { Plan } from './columns/plan'
 import type { GridCell } from './types'
 
+const isWithoutSamples = ({ columns }: Plan) => columns.some(({ meaning, uncertaintyMeaning }) => meaning === 'uncertainty' && uncertaintyMeaning === 'sd-of-replicates')
+  && !columns.some(({ meaning }) => meaning === 'samples')
+
 const counted = (number: number, one: string, many: string) => `${number} ${number === 1 ? one : many}`
 
 /** Sentences about the whole file. */
@@ -15,6 +18,7 @@ export function remarksOf({ header, below }: Head, plan: Plan): string[] {
   if (hidden > 0) remarks.push(`${counted(hidden, 'row is', 'rows are')} hidden in the sheet and read like the others.`)
   if (formulas > 0) remarks.push(`${counted(formulas, 'cell holds a formula', 'cells hold formulas')}. The values that the file keeps are taken; formulas are never run.`)
   if (merged > 0) remarks.push(`${counted(merged, 'cell is', 'cells are')} part of merged cells and taken to hold what the first of them holds.`)
+  if (isWithoutSamples(plan)) remarks.push('The table does not say how many samples stand behind its standard deviations. They are kept as given and enter no weights.')
   if (plan.isMixed) remarks.push('Decimals are marked by points in some cells and by commas in others; both are read.')
   return remarks
 }

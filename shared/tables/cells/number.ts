@@ -65,10 +65,3 @@ export function readNumber(text: string, decimal: DecimalMark, mayGroup: boolean
   const read = withPoint(body.trim(), decimal, mayGroup)
   return read && built(sign, read.digits, exponent, read.mark, read.isGrouped)
 }
-
-/** What one number says about the decimal mark of its table; null: nothing, `either`: one of two things. */
-export function markOf(text: string): '.' | ',' | 'either' | null {
-  const doubt = doubtful.exec(text)
-  if (doubt) return 'either'
-  return readNumber(text, 'both', false)?.mark ?? null
-}

@@ -19,13 +19,25 @@ export function saltOf(text: string): SaltReading {
   return reading
 }
 
+/** The formula of a salt however written; null where it is not one known salt. */
+export function saltFormula(text: string): string | null {
+  const reading = saltOf(text)
+  return reading.kind === 'salt' ? reading.salt.formula : null
+}
+
+/** The formula of the salt that a text nearly names; null where it names one, or none. */
+export function suggestedSalt(text: string): string | null {
+  const reading = saltOf(text)
+  return reading.kind === 'unknown' ? reading.suggestion : null
+}
+
 /** The salt that a heading, a file name or a remark names among other words; null where there is none. */
 export function saltAmong(text: string): string | null {
   const words = tidy(text).split(/[\s_,;:/|[\]="]+|(?<!^)\((?=[A-Z])|\)$/).filter(word => word.length > 1)
   const pairs = words.slice(1).map((word, index) => `${words[index]} ${word}`)
   for (const candidate of [tidy(text), ...pairs, ...words]) {
-    const reading = candidate.length > 40 ? null : saltOf(candidate)
-    if (reading?.kind === 'salt') return reading.salt.formula
+    const salt = candidate.length > 40 ? null : saltFormula(candidate)
+    if (salt !== null) return salt
   }
   return null
 }

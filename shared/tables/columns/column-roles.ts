@@ -1,23 +1,29 @@
-import { repeatStem, type HeadedColumn } from './columns'
+import { areConsecutive, repeatOf, type HeadedColumn } from './columns'
 import type { ColumnMeaning } from '../types'
 
 /** Meanings that one column alone can have; a second one stays with the file. */
-const single: readonly ColumnMeaning[] = ['concentration', 'salt', 'samples', 'replicate', 'batch', 'date', 'direction', 'rate', 'pH', 'limit', 'set-aside']
+export const single: readonly ColumnMeaning[] = ['concentration', 'salt', 'samples', 'replicate', 'batch', 'date', 'direction', 'rate', 'pH', 'limit', 'set-aside']
 
-const keep = (column: HeadedColumn): HeadedColumn => ({ ...column, meaning: 'kept', unit: null, direction: null, salt: null, uncertaintyMeaning: null })
+export const keep = (column: HeadedColumn): HeadedColumn => ({ ...column, meaning: 'kept', unit: null, direction: null, salt: null, uncertaintyMeaning: null })
 
 /** Rep 1, Rep 2, Rep 3 or Run 1, Run 2 side by side are cloud points measured again, not a column that numbers repeats. */
 function repeatsAsCloudPoints(columns: readonly HeadedColumn[]): HeadedColumn[] {
-  const stemOf = ({ meaning, name }: HeadedColumn) => meaning === 'replicate' || meaning === 'batch' ? repeatStem(name) : null
-  const stems = columns.map(stemOf)
-  return columns.map((column, index) => {
-    const stem = stems[index]
-    const isRepeated = typeof stem === 'string' && stems.filter(other => other === stem).length > 1
-    return isRepeated ? { ...column, meaning: 'cloud-point' } : column
-  })
+  const those = columns.filter(({ meaning }) => meaning === 'replicate' || meaning === 'batch')
+  return columns.map(column => those.includes(column) && repeatsLike(column, those).length > 1 ? { ...column, meaning: 'cloud-point' } : column)
 }
 
-const branchOf = ({ salt, direction }: HeadedColumn) => `${salt ?? ''}|${direction ?? ''}`
+/** The columns that repeat the same measurement as this one, itself among them. */
+function repeatsLike({ name }: HeadedColumn, columns: readonly HeadedColumn[]): HeadedColumn[] {
+  const own = repeatOf(name)
+  if (!own) return []
+  const alike = columns.flatMap((column) => {
+    const repeat = repeatOf(column.name)
+    return repeat?.stem === own.stem ? [{ column, repeat }] : []
+  })
+  return areConsecutive(alike.map(({ repeat }) => repeat)) ? alike.map(({ column }) => column) : []
+}
+
+export const branchOf = ({ salt, direction }: HeadedColumn) => `${salt ?? ''}|${direction ?? ''}`
 
 /** Of several columns for one salt and branch: repeats stay together, of other kinds only the first counts. */
 function oneOfEachBranch(columns: readonly HeadedColumn[]): HeadedColumn[] {
@@ -25,10 +31,8 @@ function oneOfEachBranch(columns: readonly HeadedColumn[]): HeadedColumn[] {
   const chosen = new Set<HeadedColumn>()
   for (const branch of new Set(points.map(branchOf))) {
     const members = points.filter(column => branchOf(column) === branch)
-    const stems = members.map(column => repeatStem(column.name))
-    const repeats = members.filter((_, index) => stems[index] !== null && stems.filter(stem => stem === stems[index]).length > 1)
-    const same = members.filter(column => column.name === members[0]?.name)
-    for (const column of repeats.length > 1 ? repeats : same) chosen.add(column)
+    const repeats = members.map(column => repeatsLike(column, members)).find(alike => alike.length > 1)
+    for (const column of repeats ?? members.filter(({ name }) => name === members[0]?.name)) chosen.add(column)
   }
   return columns.map(column => column.meaning === 'cloud-point' && !chosen.has(column) ? keep(column) : column)
 }

@@ -2,7 +2,7 @@ import { fold, tidy } from '../cells/fold'
 import { isGroupHeading, type Head } from './head'
 import { headerText } from './header-text'
 import { directionOf, meaningOf, uncertaintyWordOf } from './header-words'
-import { saltAmong } from '../cells/salt-cache'
+import { saltAmong, suggestedSalt } from '../cells/salt-cache'
 import type { ColumnMeaning, GridRow, TableColumn } from '../types'
 import { unitOf, type Unit } from '../cells/units'
 
@@ -10,6 +10,10 @@ import { unitOf, type Unit } from '../cells/units'
 export interface HeadedColumn extends TableColumn {
   /** heading without unit, folded */
   name: string
+  /** units that its head states, whatever they measure */
+  units: readonly Unit[]
+  /** salt that its heading nearly names, to be asked about: an anion alone, a slip of spelling */
+  nearSalt: string | null
   /** true: the meaning of its uncertainty leaves no doubt */
   isUncertaintyCertain: boolean
 }
@@ -25,24 +29,26 @@ function meaningFor(name: string, unit: Unit | null, salt: string | null): Colum
   return unit ? meaningsOfUnits[unit.of] : 'kept'
 }
 
-/** Whether a unit can belong to a meaning: K to a temperature and its uncertainty, mM to a concentration. */
-function fits(unit: Unit, meaning: ColumnMeaning): boolean {
-  return meaning === meaningsOfUnits[unit.of] || (meaning === 'uncertainty' && unit.of === 'temperature')
+/** The unit that can belong to a meaning: K to a temperature and its uncertainty, mM to a concentration. */
+export function unitFor(meaning: ColumnMeaning, units: readonly Unit[]): string | null {
+  return units.find(unit => meaning === meaningsOfUnits[unit.of] || (meaning === 'uncertainty' && unit.of === 'temperature'))?.name ?? null
 }
 
 function columnOf(index: number, header: string, unitText: string): HeadedColumn {
   const { name, unit: stated } = headerText(header)
   const salt = saltAmong(header)
+  const nearSalt = salt === null && meaningOf(name) === null ? suggestedSalt(header) : null
   const below = unitOf(unitText.replace(/^\s*[([]|[)\]]\s*$/g, ''))
-  const meaning = meaningFor(name, stated ?? below, salt)
-  const unit = [below, stated].find(candidate => candidate && fits(candidate, meaning)) ?? null
+  const meaning = meaningFor(name, stated ?? below, salt ?? nearSalt)
+  const units = [below, stated].filter(unit => unit !== null)
   const word = meaning === 'uncertainty' ? uncertaintyWordOf(name) : null
   const isBranch = meaning === 'cloud-point' || meaning === 'uncertainty'
   return {
     index, header: tidy(header.replace(/\s+/g, ' ')), name, meaning,
-    unit: unit?.name ?? null,
+    unit: unitFor(meaning, units), units,
     direction: isBranch ? directionOf(name) : null,
-    salt: isBranch || meaning === 'concentration' ? salt : null,
+    salt: isBranch ? salt ?? nearSalt : meaning === 'concentration' ? salt : null,
+    nearSalt,
     uncertaintyMeaning: word?.meaning ?? null,
     isUncertaintyCertain: word?.isCertain ?? false,
     of: null,
@@ -68,8 +74,18 @@ export function headedColumns({ header, units, group }: Head, width: number): He
   })
 }
 
+export interface Repeat { stem: string, place: number }
+
 /** Repeats of one measurement have headings that differ by a number or letter alone: T1 T2 T3, Tcp (a) Tcp (b). */
-export function repeatStem(name: string): string | null {
-  const match = /^(.*?)[ ([#-]*(?:\d{1,2}|(?<=[ (])[a-f])[)\]]?$/.exec(fold(name))
-  return match ? match[1]?.trim() ?? null : null
+export function repeatOf(name: string): Repeat | null {
+  const match = /^(.*?)[ ([#-]*(\d{1,2}|(?<=[ (])[a-f])[)\]]?$/.exec(fold(name))
+  if (!match) return null
+  const [, stem = '', mark = ''] = match
+  return { stem: stem.trim(), place: /\d/.test(mark) ? Number(mark) : mark.charCodeAt(0) }
+}
+
+/** T1 T2 T3 follow each other; T10 T50 T90 are three kinds of temperature. */
+export function areConsecutive(repeats: readonly Repeat[]): boolean {
+  const places = repeats.map(({ place }) => place).sort((one, other) => one - other)
+  return places.length > 1 && places.every((place, index) => index === 0 || place === (places[index - 1] ?? 0) + 1)
 }

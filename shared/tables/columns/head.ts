@@ -2,7 +2,7 @@ import { fold } from '../cells/fold'
 import { headerText } from './header-text'
 import { directionOf, meaningOf } from './header-words'
 import { readQuantity } from '../cells/quantity'
-import { saltAmong, saltOf } from '../cells/salt-cache'
+import { saltAmong, saltFormula, suggestedSalt } from '../cells/salt-cache'
 import type { Grid, GridRow, TableChoices } from '../types'
 import { unitOf } from '../cells/units'
 
@@ -28,7 +28,7 @@ function headingWeight(text: string): number {
   const { name, unit } = headerText(text)
   const meaning = meaningOf(name)
   if ((meaning !== null && meaning !== 'kept') || (name === '' && unit !== null) || directionOf(name) !== null) return 1
-  return saltOf(text).kind === 'salt' ? 0.5 : 0
+  return saltFormula(text) !== null || suggestedSalt(text) !== null ? 0.5 : 0
 }
 
 /** A row of nothing but units, such as M | °C | K. */

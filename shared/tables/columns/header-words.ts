@@ -14,7 +14,7 @@ const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
   ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev|dt|δt)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
   ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$|^ionic strength/],
   ['batch', /batch|^charge$|^charge\b|^lot\b|^lote$|^parti|messreihe|^serie$|^series$|^run\b|^lauf$|^set$|^tanda$/],
-  ['date', /^date|datum|^dato|fecha|^measured|gemessen|^malt|mesure le|medido|^day$|^tag$|^dag$|^jour$|^dia$|^when$/],
+  ['date', /^date|datum|^dato|fecha|^measured(?: on| at)?$|^gemessen(?: am)?$|^malt(?: den)?$|mesure le|medido|^day$|^tag$|^dag$|^jour$|^dia$|^when$/],
   ['direction', /^direction|richtung|^retning|^sens\b|direccion|^branch|^scan$|^mode$|up ?\/ ?down|heating ?\/ ?cooling|^zweig$/],
   ['note', /^notes?\b|remar[kq]|comment|kommentar|bemerkung|anmerkung|^notiz|merknad|observ|^notas?\b|^info|^hinweis/],
   ['cloud-point', /cloud(?!y)|trubung|turbidez|turbidity|turbidit|enturbiamiento|trouble|punto de nube|uklar|skypunkt|blakning|\blcst\b|\bucst\b|temp|^t$|^t ?\d{1,2}$|^t[ (]|^t-|^tcp|^tcloud|^cp$|^cp |^tc$|^tph|^tm$|^tt$|^y$|^θ$|^ϑ$|transition|ubergang|demix/],

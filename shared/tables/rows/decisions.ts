@@ -17,15 +17,14 @@ export interface RowWords {
 const silent: Words = { isAgreed: false, isLeftOut: false, isKeptTwice: false }
 export const noWords: RowWords = { row: silent, cells: new Map() }
 
-/** A correction starts a cell afresh; agreeing says yes to what the cell holds now; the other words replace each other. */
+/** A correction starts a cell afresh. One reading or both, and left out or set aside, are choices: the newer word replaces the older. */
 function after(words: Words, { action, value }: Decision): Words {
-  const kept = words.correction === undefined ? silent : { ...silent, correction: words.correction }
   switch (action) {
     case 'correct': return { ...silent, correction: value ?? '' }
-    case 'agree': return { ...kept, isAgreed: true }
-    case 'leave-out': return { ...kept, isLeftOut: true }
-    case 'set-aside': return { ...kept, setAside: value?.trim() || 'set aside at the import' }
-    case 'keep-both': return { ...kept, isKeptTwice: true }
+    case 'agree': return { ...words, isAgreed: true, isKeptTwice: false }
+    case 'keep-both': return { ...words, isAgreed: false, isKeptTwice: true }
+    case 'leave-out': return { ...words, isLeftOut: true, setAside: undefined }
+    case 'set-aside': return { ...words, isLeftOut: false, setAside: value?.trim() || 'set aside at the import' }
     case 'reopen': return silent
   }
 }

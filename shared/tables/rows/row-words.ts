@@ -26,8 +26,8 @@ export function raggedFinding(cells: readonly ReadCell[], { plan, width, head }:
   if (extra.length === 0 || !head.header) return []
   const isNote = plan.columns[width - 1]?.meaning === 'note' && extra.every(cell => /\p{L}/u.test(cell.text))
   const message = `${width + extra.length} cells under ${width} headings`
-  if (isNote) return [taken(null, 'ragged', message, 'The words behind the last column are joined to the note.')]
-  return [undecided(null, 'ragged', message, `Check that every cell stands under its heading. Agree to take the first ${width} as they stand, or leave the row out.`)]
+  if (isNote) return [taken(width, 'ragged', message, 'The words behind the last column are joined to the note.')]
+  return [undecided(width, 'ragged', message, `Check that every cell stands under its heading. Agree to take the first ${width} as they stand, or leave the row out.`)]
 }
 
 /** Batch, note and reason of a row, and whether its note sounds like a reason. */

@@ -78,7 +78,7 @@ function readCells(cells: ReadCell[], context: RowContext, words: RowWords): Row
   const kept = keptRow(cells, head, plan) ?? wordsOnly(cells, context)
   if (kept) return { findings: [kept], readings: [] }
   const read = readMeasured(cells, context)
-  return setAsideBy(words, { findings: [...otherMarks(cells, plan), ...read.findings, ...raggedFinding(cells, context)], readings: read.readings })
+  return setAsideBy(words, { findings: [...otherMarks(cells, plan, read.findings), ...read.findings, ...raggedFinding(cells, context)], readings: read.readings })
 }
 
 /** The salt that a kept row names for the rows below it. */
