@@ -33,7 +33,9 @@ export function suggestedSalt(text: string): string | null {
 
 /** The salt that a heading, a file name or a remark names among other words; null where there is none. */
 export function saltAmong(text: string): string | null {
-  const words = tidy(text).split(/[\s_,;:/|[\]="]+|(?<!^)\((?=[A-Z])|\)$/).filter(word => word.length > 1)
+  const parts = tidy(text).split(/[\s_,;:/|[\]="]+/)
+  // c(NaCl) holds a salt inside its brackets, Ca(NO3)2 is one with them.
+  const words = [...parts, ...parts.map(part => /^[^()]*\((.+)\)$/.exec(part)?.[1] ?? '')].filter(word => word.length > 1)
   const pairs = words.slice(1).map((word, index) => `${words[index]} ${word}`)
   for (const candidate of [tidy(text), ...pairs, ...words]) {
     const salt = candidate.length > 40 ? null : saltFormula(candidate)
