@@ -2,8 +2,9 @@ import { and, eq, sql } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import type { Job } from '#shared/contracts/jobs'
 import { asPerson } from '~~/server/database/client'
-import { auditEvent, job } from '~~/server/database/schema'
+import { job } from '~~/server/database/schema'
 import { enqueue } from '~~/server/jobs/queue'
+import { note } from './audit'
 import { ServiceError } from './errors'
 
 type JobRow = typeof job.$inferSelect
@@ -35,7 +36,7 @@ export function startRefit(who: string, project: string): Promise<Job> {
   return asPerson(who, async (tx) => {
     const id = v7()
     const [row] = await tx.insert(job).values({ id, kind: 'refit', project, person: who, input: {} }).returning()
-    await tx.insert(auditEvent).values({ person: who, project, action: 'started', subject: 'job', subjectId: id, values: { kind: 'refit' } })
+    await note(tx, who, { project, action: 'started', subject: 'job', id, values: { kind: 'refit' } })
     await enqueue(tx, 'refit', id)
     return written(row!)
   })

@@ -3,7 +3,8 @@ import { v7 } from 'uuid'
 import type { z } from 'zod'
 import type { newProjectContract, Project, ProjectDetail } from '#shared/contracts/projects'
 import { asPerson, type Transaction } from '~~/server/database/client'
-import { auditEvent, campaign, lab, membership, person, project, projectLab, projectMember } from '~~/server/database/schema'
+import { campaign, lab, membership, person, project, projectLab, projectMember } from '~~/server/database/schema'
+import { note } from './audit'
 import { cursorOf, pageOf, type Page } from './pages'
 
 export type ProjectRole = typeof projectMember.$inferSelect.role
@@ -46,20 +47,31 @@ export function makeProject(who: string, { name, question }: z.infer<typeof newP
     await tx.insert(project).values(made)
     const labs = await tx.selectDistinct({ lab: membership.lab }).from(membership).where(eq(membership.person, who))
     if (labs.length > 0) await tx.insert(projectLab).values(labs.map(({ lab }) => ({ project: made.id, lab })))
-    await tx.insert(auditEvent).values({ person: who, project: made.id, action: 'made', subject: 'project', subjectId: made.id, values: {} })
-    const [row] = await tx.select(fields).from(project)
-      .innerJoin(projectMember, and(eq(projectMember.project, project.id), eq(projectMember.person, who)))
-      .where(eq(project.id, made.id))
-    return written(row!)
+    await note(tx, who, { project: made.id, action: 'made', subject: 'project', id: made.id })
+    return readProject(tx, who, made.id)
   })
+}
+
+/** Changes name and question. */
+export function changeProject(who: string, id: string, { name, question }: z.infer<typeof newProjectContract>): Promise<Project> {
+  return asPerson(who, async (tx) => {
+    await tx.update(project).set({ name, question: question ?? null }).where(eq(project.id, id))
+    await note(tx, who, { project: id, action: 'changed', subject: 'project', id, values: { name } })
+    return readProject(tx, who, id)
+  })
+}
+
+async function readProject(tx: Transaction, who: string, id: string): Promise<Project> {
+  const [row] = await tx.select(fields).from(project)
+    .innerJoin(projectMember, and(eq(projectMember.project, project.id), eq(projectMember.person, who)))
+    .where(eq(project.id, id))
+  return written(row!)
 }
 
 /** One project with its labs, campaigns and members. */
 export function showProject(who: string, id: string): Promise<ProjectDetail> {
   return asPerson(who, async (tx) => {
-    const [row] = await tx.select(fields).from(project)
-      .innerJoin(projectMember, and(eq(projectMember.project, project.id), eq(projectMember.person, who)))
-      .where(eq(project.id, id))
+    const head = await readProject(tx, who, id)
     const labs = await tx.select({ id: lab.id, name: lab.name }).from(projectLab)
       .innerJoin(lab, eq(lab.id, projectLab.lab)).where(eq(projectLab.project, id)).orderBy(asc(lab.name))
     const campaigns = await tx.select({ id: campaign.id, name: campaign.name, clouds: campaign.clouds, lab: { id: lab.id, name: lab.name } })
@@ -68,6 +80,6 @@ export function showProject(who: string, id: string): Promise<ProjectDetail> {
     const members = await tx.select({ role: projectMember.role, person: { id: person.id, name: person.name } })
       .from(projectMember).innerJoin(person, eq(person.id, projectMember.person))
       .where(eq(projectMember.project, id)).orderBy(asc(projectMember.role), asc(person.name))
-    return { ...written(row!), labs, campaigns, members }
+    return { ...head, labs, campaigns, members }
   })
 }

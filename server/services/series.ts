@@ -1,8 +1,9 @@
-import { and, asc, countDistinct, desc, eq, gt, isNull } from 'drizzle-orm'
+import { and, asc, desc, eq, gt, isNull } from 'drizzle-orm'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 import { ScienceError } from '#shared/science/errors'
 import { asPerson, type Transaction } from '~~/server/database/client'
-import { batch, batchRevision, campaign, lab, person, project, reading, sample, series, seriesRevision, stock } from '~~/server/database/schema'
+import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
+import { batchesIn } from './campaign-content'
 import { conditionsOf } from './conditions'
 import { ServiceError } from './errors'
 import { compareInPool } from './fit-pool'
@@ -10,14 +11,6 @@ import { currentFits, pointsOf, usualOptions } from './fits'
 import { cursorOf, pageOf, type Page } from './pages'
 import { mayEdit, roleIn } from './projects'
 import { contentOf, type SeriesContent } from './series-content'
-
-/** The project of a series that a person may see; null where there is nothing to see. */
-export function seriesProject(who: string, id: string): Promise<string | null> {
-  return asPerson(who, async (tx) => {
-    const [found] = await tx.select({ project: series.project }).from(series).where(and(eq(series.id, id), isNull(series.deletedAt)))
-    return found?.project ?? null
-  })
-}
 
 const heads = (tx: Transaction) => tx
   .select({ series, campaign, lab, stock, sample, project: { id: project.id, name: project.name } })
@@ -79,18 +72,7 @@ async function readSeries(tx: Transaction, who: string, id: string) {
   const content = (await contentOf(tx, [id])).get(id)!
   const fits = await currentFits(tx, content.revision ? [content.revision.id] : [])
   const role = await roleIn(tx, who, found!.project.id)
-  return { head: found!, role, content, fits, batches: await batchesOf(tx, found!.campaign.id), revisions: await revisionsOf(tx, id) }
-}
-
-/** The batches of a campaign, each with the newest state of its blanks and the number of series that lean on them. */
-async function batchesOf(tx: Transaction, of: string): Promise<Series['batches']> {
-  const usedBy = tx.select({ batch: reading.batch, count: countDistinct(reading.series).as('used_by') }).from(reading).groupBy(reading.batch).as('used')
-  const rows = await tx.selectDistinctOn([batch.id], {
-    id: batch.id, label: batch.label, measuredOn: batch.measuredOn, revision: batchRevision.number, usedBy: usedBy.count,
-  }).from(batch)
-    .leftJoin(batchRevision, eq(batchRevision.batch, batch.id)).leftJoin(usedBy, eq(usedBy.batch, batch.id))
-    .where(eq(batch.campaign, of)).orderBy(batch.id, desc(batchRevision.number))
-  return rows.map(({ usedBy: count, ...row }) => ({ ...row, usedBy: count ?? 0 }))
+  return { head: found!, role, content, fits, batches: await batchesIn(tx, found!.campaign.id), revisions: await revisionsOf(tx, id) }
 }
 
 async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisions']> {

@@ -1,9 +1,10 @@
 import type { H3Event } from 'h3'
+import { instrumentRight } from '~~/server/services/instruments'
 import { jobRight } from '~~/server/services/jobs'
 import { mayEdit, projectRight } from '~~/server/services/projects'
-import { seriesProject } from '~~/server/services/series'
 import { ServiceError } from '~~/server/services/errors'
 import type { Visitor } from '~~/server/services/sessions'
+import { projectHolding, type Thing } from '~~/server/services/whereabouts'
 import { visitorOf } from './visitor'
 
 /** Who may call a route. The name stands in the access table; the sentence in the API's description. */
@@ -55,12 +56,50 @@ export const projectEditor: AccessRule<Visitor> = {
   admit: async (event, params) => admitToProject(await signedInVisitor(event), params.project!, true),
 }
 
-export const seriesReader: AccessRule<Visitor> = {
-  name: 'seriesReader',
-  sentence: 'Members of the project that holds the series.',
+export const projectOwner: AccessRule<Visitor> = {
+  name: 'projectOwner',
+  sentence: 'Owners of the project.',
   async admit(event, params) {
     const visitor = await signedInVisitor(event)
-    return admitToProject(visitor, await seriesProject(visitor.id, params.series!), false)
+    const role = await projectRight(visitor.id, params.project!)
+    if (!role) throw nowhere()
+    if (role !== 'owner') throw new ServiceError('forbidden', 'Only an owner of the project changes this.')
+    return visitor
+  },
+}
+
+/** A rule for what lies inside a project, named by the thing in the address. */
+function inside(thing: Thing, right: 'Reader' | 'Editor'): AccessRule<Visitor> {
+  return {
+    name: `${thing}${right}`,
+    sentence: `${right === 'Reader' ? 'Members' : 'Owners and editors'} of the project that holds the ${thing}.`,
+    async admit(event, params) {
+      const visitor = await signedInVisitor(event)
+      return admitToProject(visitor, await projectHolding(visitor.id, thing, params[thing]!), right === 'Editor')
+    },
+  }
+}
+
+export const seriesReader = inside('series', 'Reader')
+export const seriesEditor = inside('series', 'Editor')
+export const campaignReader = inside('campaign', 'Reader')
+export const campaignEditor = inside('campaign', 'Editor')
+export const batchReader = inside('batch', 'Reader')
+export const batchEditor = inside('batch', 'Editor')
+export const sampleEditor = inside('sample', 'Editor')
+export const stockEditor = inside('stock', 'Editor')
+export const importReader = inside('import', 'Reader')
+export const importEditor = inside('import', 'Editor')
+
+export const instrumentEditor: AccessRule<Visitor> = {
+  name: 'instrumentEditor',
+  sentence: 'Members of the lab that owns the instrument.',
+  async admit(event, params) {
+    const visitor = await signedInVisitor(event)
+    const right = await instrumentRight(visitor.id, params.instrument!)
+    if (!right) throw nowhere()
+    if (right === 'see') throw new ServiceError('forbidden', 'Only members of its lab change an instrument.')
+    return visitor
   },
 }
 

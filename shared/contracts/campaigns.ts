@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { id, named } from './common'
-import { day, later, laterText, positive, requiredText } from './forms'
+import { day, later, laterText, positive, requiredText, text } from './forms'
 import { instrumentContract, sampleContract } from './materials'
 import { saltContract } from './series'
 
@@ -11,30 +11,35 @@ export const criteria = ['onset', 'fraction', 'steepest', 'departure', 'sigmoid'
 export const enthalpyBases = ['per-repeat-unit', 'per-cooperative-unit'] as const
 export const replicateKinds = ['independent-samples', 'repeat-scans'] as const
 
+/** Left out: not stated here (a copy keeps what it copies); null: left for later. */
 const campaignFields = {
   name: requiredText(120),
-  lab: id.optional().describe('default: the only lab of the person in the project'),
-  clouds: z.enum(cloudings).default('on-heating'),
-  sample: later(id),
-  instrument: later(id),
-  solvent: requiredText(120).default('water'),
-  buffer: laterText(200).describe('its ions are outside the varied concentration'),
-  ph: later(z.number().min(-2, 'must be −2 or more').max(16, 'must be at most 16')),
-  polymerConcentration: later(positive).describe('g/L'),
-  criterion: later(z.enum(criteria)),
-  criterionFraction: later(positive.lt(1, 'must be below 1')).describe('fraction of the transmittance, with criterion "fraction"'),
-  rate: later(positive).describe('K/min'),
-  hold: later(z.number().min(0, 'must be 0 or more')).describe('min held before a ramp'),
-  replicateKind: later(z.enum(replicateKinds)).describe('what a replicate is'),
-  transitionEnthalpy: later(z.number()).describe('kJ/mol'),
-  transitionEnthalpyBasis: later(z.enum(enthalpyBases)),
-  startedOn: later(day),
+  clouds: z.enum(cloudings).optional(),
+  sample: id.nullish(),
+  instrument: id.nullish(),
+  solvent: requiredText(120).optional(),
+  buffer: text(200).nullish().describe('its ions are outside the varied concentration'),
+  ph: z.number('must be a number').min(-2, 'must be −2 or more').max(16, 'must be at most 16').nullish(),
+  polymerConcentration: positive.nullish().describe('g/L'),
+  criterion: z.enum(criteria).nullish(),
+  criterionFraction: positive.lt(1, 'must be below 1').nullish().describe('fraction of the transmittance, with criterion "fraction"'),
+  rate: positive.nullish().describe('K/min'),
+  hold: z.number('must be a number').min(0, 'must be 0 or more').nullish().describe('min held before a ramp'),
+  replicateKind: z.enum(replicateKinds).nullish().describe('what a replicate is'),
+  transitionEnthalpy: z.number('must be a number').nullish().describe('kJ/mol'),
+  transitionEnthalpyBasis: z.enum(enthalpyBases).nullish(),
+  startedOn: day.nullish(),
 } as const
 
 /** `copyFrom` takes every condition that is not given from another campaign one may see. */
-export const newCampaignContract = z.strictObject({ ...campaignFields, copyFrom: id.optional() })
-/** The whole form again; what is left out is left for later. */
-export const changeCampaignContract = z.strictObject(campaignFields).omit({ lab: true })
+export const newCampaignContract = z.strictObject({
+  ...campaignFields,
+  lab: id.optional().describe('default: the only lab of the person in the project'),
+  copyFrom: id.optional(),
+})
+/** The whole form again; what is left out is not stated any more. */
+export const changeCampaignContract = z.strictObject(campaignFields)
+export type CampaignForm = z.infer<typeof changeCampaignContract>
 
 export const batchContract = z.object({
   id, label: z.string(), measuredOn: z.iso.date().nullable(), referenceCheck: z.number().nullable(), note: z.string().nullable(),

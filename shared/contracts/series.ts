@@ -113,7 +113,7 @@ export const seriesContract = z.object({
   revision: z.number().int().nullable(),
   choice: fitChoiceContract.nullable().describe('how this revision asks to be fitted; null: the form its readings support'),
   batches: z.array(z.object({
-    id, label: z.string(), measuredOn: z.iso.date().nullable(), revision: z.number().int().nullable().describe('of the blanks'), usedBy: z.number().int().describe('series of the batch'),
+    id, label: z.string(), measuredOn: z.iso.date().nullable(), revision: z.number().int().nullable().describe('of the blanks'), series: z.number().int().describe('how many series of the batch lean on its blanks'),
   })),
   readings: z.array(readingContract),
   fit: fitResultContract.extend({ id }).nullable(),

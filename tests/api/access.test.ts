@@ -11,7 +11,12 @@ const expected: Record<string, Record<Visitor, 'in' | 401 | 403 | 404>> = {
   signedIn: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 'in', 'admin': 'in' },
   projectMember: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
   projectEditor: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 403, 'outsider': 404, 'admin': 404 },
-  seriesReader: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
+  projectOwner: { 'signed out': 401, 'owner': 'in', 'member': 403, 'collaborator': 403, 'outsider': 404, 'admin': 404 },
+  ...Object.fromEntries(['campaign', 'batch', 'series', 'sample', 'stock', 'import'].flatMap(thing => [
+    [`${thing}Reader`, { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 }],
+    [`${thing}Editor`, { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 403, 'outsider': 404, 'admin': 404 }],
+  ])),
+  instrumentEditor: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 403, 'outsider': 404, 'admin': 404 },
   jobWatcher: { 'signed out': 401, 'owner': 'in', 'member': 'in', 'collaborator': 'in', 'outsider': 404, 'admin': 404 },
   jobOwner: { 'signed out': 401, 'owner': 'in', 'member': 403, 'collaborator': 403, 'outsider': 404, 'admin': 404 },
 }
@@ -41,6 +46,13 @@ beforeAll(async () => {
   const owner = agents.get('owner')!
   places.project = await demoProject()
   places.series = (await owner.get(`/api/v1/projects/${places.project}/series`).expect(200)).body.items[0].id
+  const { samples, stocks, instruments } = (await owner.get(`/api/v1/projects/${places.project}/materials`).expect(200)).body
+  places.sample = samples[0].id
+  places.stock = stocks[0].id
+  places.instrument = instruments.find((one: { lab: { name: string } }) => one.lab.name === 'Norrvik').id
+  const { campaigns } = (await owner.get(`/api/v1/projects/${places.project}`).expect(200)).body
+  places.campaign = campaigns[0].id
+  places.batch = (await owner.get(`/api/v1/campaigns/${places.campaign}`).expect(200)).body.batches[0].id
   places.job = (await owner.post(`/api/v1/projects/${places.project}/refit`).expect(202)).body.id
 })
 
