@@ -54,6 +54,11 @@ function isGroupedBy(whole: string, mark: string): boolean {
  * @param mayGroup whether 1,234 may be one thousand and more; only large quantities are
  */
 export function readNumber(text: string, decimal: DecimalMark, mayGroup: boolean): WrittenNumber | null {
+  const number = readAny(text, decimal, mayGroup)
+  return number && Number.isFinite(number.value) ? number : null
+}
+
+function readAny(text: string, decimal: DecimalMark, mayGroup: boolean): WrittenNumber | null {
   if (plain.test(text) && !(decimal === ',' && mayGroup && doubtful.test(text))) {
     // Most cells of a large table pass here.
     const point = text.indexOf('.')

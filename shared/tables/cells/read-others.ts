@@ -24,11 +24,13 @@ export function readDateCell(cell: ReadCell, column: PlannedColumn, plan: Plan):
   return without(column.index, 'bad-date', 'date', cell.text)
 }
 
+const mostSamples = 100_000
+
 /** How many independent samples stand behind a value. */
 export function readSamples(cell: ReadCell, column: PlannedColumn, plan: Plan): Found<number> {
   const reading = quantityOf({ ...cell, text: cell.text.replace(/^\s*n\s*=\s*/i, '') }, column, plan)
   if (reading.kind === 'empty' || reading.kind === 'not-determined') return nothing
-  if (reading.kind === 'number' && Number.isInteger(reading.number.value) && reading.number.value >= 1) return { value: reading.number.value, findings: [] }
+  if (reading.kind === 'number' && Number.isInteger(reading.number.value) && reading.number.value >= 1 && reading.number.value <= mostSamples) return { value: reading.number.value, findings: [] }
   return { value: null, findings: [fault(column.index, 'not-a-number', `Not a number of samples: ${cell.text.trim().slice(0, 60)}`, 'Type a whole number from 1, or empty the cell.')] }
 }
 

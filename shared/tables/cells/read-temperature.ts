@@ -13,6 +13,8 @@ export interface Temperature {
 
 const lowest = 0
 const highest = 100
+/** What a reading that is set aside may still say; beyond it no number is a temperature. */
+const isThinkable = (value: number) => value > -273.15 && value < 1000
 const isInRange = (value: number) => value >= lowest && value <= highest
 
 export function celsiusOf(number: Decimal, unit: string | null): Decimal {
@@ -88,7 +90,7 @@ export function readTemperature(cell: ReadCell, column: PlannedColumn, plan: Pla
   const y = celsiusOf(reading.number, unit)
   const stated = reading.uncertainty && { ...reading.uncertainty, number: kelvinStepOf(reading.uncertainty.number, unit) }
   const value = { y, limit: reading.limit, stated }
-  if (!isInRange(y.value) && !column.isUnitOpen) return { value, findings: [outsideRange(cell, column, reading)] }
+  if (!isInRange(y.value) && !column.isUnitOpen) return { value: isThinkable(y.value) ? value : null, findings: [outsideRange(cell, column, reading)] }
   return { value, findings: [...aboutUnit(cell, column, reading, y), ...aboutLimit(column, reading, y), ...aboutUncertainty(column, reading), ...takenFindings(cell, column, reading, plan)] }
 }
 

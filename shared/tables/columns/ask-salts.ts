@@ -12,21 +12,23 @@ const known = sodiumSalts.map(({ formula }) => formula)
 /** Salts to choose from, the likeliest first; any other may be typed. */
 const saltOptions = (first: string | null) => optionsOf(first === null ? known : [first, ...known.filter(salt => salt !== first)])
 
-/** The one salt of a table without a column of salts: as a heading says, else as a person says, else as lines above it or the file's name do. */
-export function settleSalt(columns: readonly HeadedColumn[], head: Head, fileName: string, choices: TableChoices): Pick<Plan, 'salt'> & { questions: Question[] } {
+/** The one salt of a table without a column of salts: as a heading says, else as a person says, else as lines above it, the sheet's or the file's name do. */
+export function settleSalt(columns: readonly HeadedColumn[], head: Head, names: readonly string[], choices: TableChoices): Pick<Plan, 'salt'> & { questions: Question[] } {
   const isNamed = columns.some(({ meaning }) => meaning === 'salt') || !columns.some(({ meaning, salt }) => meaning === 'cloud-point' && salt === null)
   if (isNamed) return { salt: null, questions: [] }
   if (hasSections(head)) return { salt: null, questions: [] }
   const inHeading = columns.find(({ meaning, salt }) => meaning === 'concentration' && salt !== null)?.salt
   if (inHeading) return { salt: inHeading, questions: [] }
   const remarks = head.preamble.flatMap(({ cells }) => cells.map(({ text }) => text))
-  const assumed = remarks.map(saltAmong).find(salt => salt !== null) ?? saltAmong(fileName.replace(/\.[a-z]{1,5}$/i, '').replaceAll('-', ' '))
+  const assumed = remarks.map(saltAmong).find(salt => salt !== null) ?? names.map(saltInName).find(salt => salt !== null) ?? null
   const question = ask({
     code: 'salt-of-table', subject: '', message: 'No column names the salt. Which salt was measured?',
     options: saltOptions(assumed),
   }, assumed, choices)
   return { salt: question.answer === null ? null : saltFormula(question.answer), questions: [question] }
 }
+
+const saltInName = (name: string) => saltAmong(name.replace(/\.[a-z]{1,5}$/i, '').replaceAll('-', ' '))
 
 /** A row that names a salt for the rows below it makes the question for the table's salt needless. */
 function hasSections({ below }: Head): boolean {

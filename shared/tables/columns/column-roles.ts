@@ -29,10 +29,13 @@ export const branchOf = ({ salt, direction }: HeadedColumn) => `${salt ?? ''}|${
 function oneOfEachBranch(columns: readonly HeadedColumn[]): HeadedColumn[] {
   const points = columns.filter(column => column.meaning === 'cloud-point')
   const chosen = new Set<HeadedColumn>()
+  const isOneTable = columns.filter(({ meaning }) => meaning === 'concentration').length < 2
   for (const branch of new Set(points.map(branchOf))) {
     const members = points.filter(column => branchOf(column) === branch)
     const repeats = members.map(column => repeatsLike(column, members)).find(alike => alike.length > 1)
-    for (const column of repeats ?? members.filter(({ name }) => name === members[0]?.name)) chosen.add(column)
+    // Beside a second column of concentrations stands a table of its own, not a repeat.
+    const same = members.filter(({ name }, place) => place === 0 || (isOneTable && name === members[0]?.name))
+    for (const column of repeats ?? same) chosen.add(column)
   }
   return columns.map(column => column.meaning === 'cloud-point' && !chosen.has(column) ? keep(column) : column)
 }

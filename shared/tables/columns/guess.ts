@@ -1,7 +1,8 @@
-import type { HeadedColumn } from './columns'
 import { readDate } from '../cells/dates'
 import { saltOf } from '../cells/salt-cache'
 import type { ColumnMeaning, GridRow } from '../types'
+import type { HeadedColumn } from './columns'
+import { meaningOf } from './header-words'
 import { middleOf, valuesOf } from './values'
 
 const sample = 200
@@ -14,38 +15,52 @@ function lookAt(rows: readonly GridRow[], index: number): Look {
   const most = (test: (text: string) => boolean) => texts.length > 0 && texts.filter(test).length > texts.length / 2
   return {
     index, middle: middleOf(numbers), share: texts.length === 0 ? 0 : (numbers.length + withUnit) / texts.length,
-    isSalt: most(text => saltOf(text).kind !== 'unknown'),
+    isSalt: most(text => saltOf(text).kind !== 'unknown' && /\p{L}/u.test(text)),
     isDate: most(text => readDate(text, 'day-month-year') !== null),
     isText: most(text => /\p{L}{2}/u.test(text)),
   }
 }
 
-/** What columns hold when no heading says so: the first numbers are concentrations, the next temperatures, small ones behind them uncertainties. */
-function guessAll(looks: readonly Look[]): Map<number, ColumnMeaning> {
-  const guesses = new Map<number, ColumnMeaning>()
+/** Concentrations are mostly smaller than this, cloud points larger; uncertainties are smaller, too. */
+const smallest = 2
+
+/** What columns may hold by their values: the first numbers are concentrations, larger ones temperatures, small ones behind them uncertainties. */
+function guessAll(looks: readonly Look[]): Map<ColumnMeaning, number> {
+  const guesses = new Map<ColumnMeaning, number>()
+  const guess = (meaning: ColumnMeaning, look: Look | undefined) => {
+    if (look) guesses.set(meaning, look.index)
+    return look
+  }
   const numeric = looks.filter(look => look.share > 0.6 && !look.isDate)
-  const points = numeric.filter(({ middle }, place) => place > 0 && middle !== null && middle > 2)
-  const [point = numeric[1]] = points
-  const concentration = numeric.find(look => look !== point)
-  const uncertainty = numeric.find(({ index, middle }) => point && index > point.index && middle !== null && middle < 2 && index !== concentration?.index)
-  if (concentration) guesses.set(concentration.index, 'concentration')
-  if (point) guesses.set(point.index, 'cloud-point')
-  if (uncertainty) guesses.set(uncertainty.index, 'uncertainty')
-  const salt = looks.find(({ isSalt }) => isSalt)
-  const date = looks.find(({ isDate }) => isDate)
-  const note = looks.findLast(({ isText, index }) => isText && index !== salt?.index && index !== date?.index)
-  if (salt) guesses.set(salt.index, 'salt')
-  if (date) guesses.set(date.index, 'date')
-  if (note) guesses.set(note.index, 'note')
+  const point = guess('cloud-point', numeric.find(({ middle }, place) => place > 0 && middle !== null && middle > smallest) ?? numeric[1])
+  const concentration = guess('concentration', numeric.find(look => look !== point))
+  guess('uncertainty', numeric.find(look => point && look.index > point.index && look.middle !== null && look.middle < smallest && look !== concentration))
+  const salt = guess('salt', looks.find(({ isSalt }) => isSalt))
+  const date = guess('date', looks.find(({ isDate }) => isDate))
+  guess('note', looks.findLast(look => look.isText && look !== salt && look !== date))
   return guesses
 }
 
-/** Gives columns a meaning by their values: all where there is no header, and those without a heading beside ones with. */
+/** What a reading cannot do without; where no heading names it, an unknown heading may. */
+function guessMissing(columns: readonly HeadedColumn[], rows: readonly GridRow[]): Map<ColumnMeaning, number> {
+  const has = (meaning: ColumnMeaning) => columns.some(column => column.meaning === meaning)
+  const open = columns.filter(({ meaning, name }) => meaning === 'kept' && meaningOf(name) === null).map(({ index }) => lookAt(rows, index))
+  const numeric = open.filter(look => look.share > 0.6 && !look.isDate)
+  const point = has('cloud-point') ? undefined : numeric.find(({ middle }, place) => middle !== null && middle > smallest && (has('concentration') || place > 0))
+  const concentration = has('concentration') ? undefined : numeric.find(look => look !== point)
+  const salt = has('salt') ? undefined : open.find(({ isSalt }) => isSalt)
+  const found = [['cloud-point', point], ['concentration', concentration], ['salt', salt]] as const
+  return new Map(found.flatMap(([meaning, look]) => look ? [[meaning, look.index] as const] : []))
+}
+
+/**
+ * Gives columns a meaning by their values: all of them where there is no header, else what no heading names.
+ * Words without a heading are notes.
+ */
 export function guessMeanings(columns: readonly HeadedColumn[], rows: readonly GridRow[], hasHeader: boolean): HeadedColumn[] {
   const some = rows.slice(0, sample)
-  if (!hasHeader) {
-    const guesses = guessAll(columns.map(({ index }) => lookAt(some, index)))
-    return columns.map(column => ({ ...column, meaning: guesses.get(column.index) ?? 'kept' }))
-  }
-  return columns.map(column => column.header === '' && column.meaning === 'kept' && lookAt(some, column.index).isText ? { ...column, meaning: 'note' } : column)
+  const guesses = hasHeader ? guessMissing(columns, some) : guessAll(columns.map(({ index }) => lookAt(some, index)))
+  const meanings = new Map([...guesses].map(([meaning, index]) => [index, meaning]))
+  const isNote = ({ header, meaning, index }: HeadedColumn) => hasHeader && header === '' && meaning === 'kept' && lookAt(some, index).isText
+  return columns.map(column => ({ ...column, meaning: meanings.get(column.index) ?? (isNote(column) ? 'note' : column.meaning) }))
 }

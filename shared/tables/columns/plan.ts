@@ -28,6 +28,10 @@ export interface Plan {
   salt: string | null
   /** true: exported by us; read back without filling in or joining anything */
   isOwnExport: boolean
+  /** headings of columns that stay with the file because others were taken for what they say */
+  leftBehind: readonly string[]
+  /** headings of columns whose meaning comes from their values */
+  readByValues: readonly string[]
 }
 
 /** Columns in which only numbers make sense. */

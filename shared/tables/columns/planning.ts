@@ -39,20 +39,32 @@ function settleDates(columns: readonly HeadedColumn[], { below }: Head, choices:
   return { dateOrder: isOneOf(dateOrders, question.answer) ? question.answer : order, questions: [question] }
 }
 
+/** Headings about which the file leaves a doubt that nobody has settled yet. */
+function doubtfulHeadings(named: readonly HeadedColumn[], guessed: readonly HeadedColumn[], headed: readonly HeadedColumn[], choices: TableChoices): Pick<Plan, 'leftBehind' | 'readByValues'> {
+  const isSettled = ({ index }: HeadedColumn) => choices.columns?.some(choice => choice.index === index && choice.meaning !== undefined) ?? false
+  const headings = (columns: readonly HeadedColumn[]) => columns.filter(column => column.header !== '' && !isSettled(column)).map(({ header }) => header)
+  return {
+    leftBehind: headings(guessed.filter(({ meaning }, index) => meaning !== 'kept' && headed[index]?.meaning === 'kept')),
+    readByValues: headings(named.filter(({ meaning }, index) => meaning === 'kept' && guessed[index]?.meaning !== 'kept')),
+  }
+}
+
 /** Settles how a table is read: what its columns hold, its units, marks and dates, and what has to be asked. */
 export function planTable(grid: Grid, head: Head, width: number, fileName: string, choices: TableChoices): { plan: Plan, questions: Question[] } {
-  const headed = withChoices(assignRoles(guessMeanings(headedColumns(head, width), head.below, head.header !== null)), choices)
+  const named = headedColumns(head, width)
+  const guessed = guessMeanings(named, head.below, head.header !== null)
+  const headed = withChoices(assignRoles(guessed), choices)
   const valued = headed.map(column => ({ ...column, values: valuesOf(numeric.has(column.meaning) ? head.below : [], column.index, mayGroup(column)) }))
   const marks = settleDecimal(valued, choices)
   const settled = settleUncertainties(settleUnits(valued, choices), choices)
   const dates = settleDates(settled.columns, head, choices)
   const near = settleNearSalts(settled, choices)
-  const salt = settleSalt(near.columns, head, fileName, choices)
+  const salt = settleSalt(near.columns, head, [grid.sheet ?? '', fileName], choices)
   const columns = near.columns.map(({ values, ...column }) => ({
     ...column, middle: middleOf(values.numbers), usualDecimals: usualDecimalsOf(values.numbers), mayGroup: mayGroup(column),
   }))
   return {
-    plan: { format: grid.format, columns, decimal: marks.decimal, isMixed: marks.isMixed, dateOrder: dates.dateOrder, salt: salt.salt, isOwnExport: isOwnExport(headed) },
+    plan: { format: grid.format, columns, decimal: marks.decimal, isMixed: marks.isMixed, dateOrder: dates.dateOrder, salt: salt.salt, isOwnExport: isOwnExport(headed), ...doubtfulHeadings(named, guessed, headed, choices) },
     questions: [...near.questions, ...marks.questions, ...dates.questions, ...salt.questions],
   }
 }

@@ -1,6 +1,6 @@
 import { pointOf, type Point } from './branch-reading'
 import type { Branch } from '../columns/branches'
-import { fault, quoted, type Finding, type Found, type ReadCell } from '../cells/finding'
+import { fault, nothing, quoted, type Finding, type Found, type ReadCell } from '../cells/finding'
 import { keptFinding } from './kept-rows'
 import { columnFor } from '../columns/plan'
 import { readConcentration } from '../cells/read-concentration'
@@ -23,8 +23,11 @@ export function readMeasured(cells: readonly ReadCell[], context: RowContext): R
   }
   const samples = optional('samples', (cell, column) => readSamples(cell, column, plan))
   const points = branches.map(branch => ({ branch, ...pointOf(cellAt, branch, plan, samples.value) }))
-  const concentration = optional('concentration', (cell, column) => readConcentration(cell, column, plan))
   const named = optional('salt', (cell, column) => readSaltCell(cell, column.index))
+  const stated = optional('concentration', (cell, column) => readConcentration(cell, column, plan))
+  // A dash beside "blank" says that there is no salt, not that its amount is missing.
+  const isDash = named.value?.salt === null && stated.findings.some(({ code }) => code === 'not-determined')
+  const concentration = isDash ? nothing : stated
   const others = {
     date: optional('date', (cell, column) => readDateCell(cell, column, plan)),
     direction: optional('direction', readDirection),

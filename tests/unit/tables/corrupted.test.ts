@@ -57,11 +57,13 @@ function expectAllAccountedFor(bytes: Uint8Array, chosen: TableChoices) {
   const missing = grid.rows.map(({ number }) => number).filter(number => !numbers.includes(number))
   // Header, units and a row of salts above the header are head.
   expect(missing.every(number => number === headerRow || number === unitsRow || number === (headerRow ?? 0) - 1)).toBe(true)
+  const isBlocked = understood.questions.some(question => question.isBlocking)
   for (const { state, readings, problems } of rows) {
     expect(readings.length > 0).toBe(state === 'ready')
     expect(state === 'ready' || problems.length > 0).toBe(true)
     for (const { x, y, sd, n } of readings) {
       expect(x >= 0 && Number.isFinite(x) && Number.isFinite(y)).toBe(true)
+      expect(isBlocked || (y > -273.15 && y < 1000)).toBe(true)
       expect(sd === null || (sd >= 0 && Number.isFinite(sd))).toBe(true)
       expect(n === null || n >= 1).toBe(true)
     }

@@ -1,4 +1,3 @@
-// The list of every test file with its answer is long because each file is an answer of its own.
 /** What each file under tests/fixtures/tables is refused for. */
 export const refusedFiles: readonly { file: string, code: string }[] = [
   { file: 'binary.csv', code: 'not-a-table' },
@@ -53,6 +52,15 @@ export const understoodFiles: readonly ExpectedFile[] = [
   {
     file: 'batches.csv', cut: 'csv utf-8 .', form: 'long', head: [1, null], counts: [4, 4, 0, 0, 0],
     columns: 'salt, concentration mol/L, cloud-point °C, batch, date',
+  },
+  {
+    file: 'blank-dash.csv', cut: 'csv utf-8 .', form: 'long', head: [1, null], counts: [3, 2, 1, 0, 0],
+    columns: 'salt, concentration mol/L, cloud-point °C',
+    problems: ['3 decide no-salt'],
+  },
+  {
+    file: 'branches-of-salts.csv', cut: 'csv utf-8 .', form: 'wide', head: [1, null], counts: [2, 2, 0, 0, 0],
+    columns: 'concentration mol/L, cloud-point °C heating NaCl, cloud-point °C cooling NaCl, cloud-point °C heating NaSCN, cloud-point °C cooling NaSCN',
   },
   {
     file: 'branches.csv', cut: 'csv utf-8 .', form: 'wide', head: [1, null], counts: [3, 3, 0, 0, 0],
@@ -216,6 +224,11 @@ export const understoodFiles: readonly ExpectedFile[] = [
     problems: ['1 kept preamble'],
   },
   {
+    file: 'side-by-side.csv', cut: 'csv utf-8 .', form: 'long', head: [1, null], counts: [2, 2, 0, 0, 0],
+    columns: 'concentration mol/L, cloud-point °C, kept, kept, kept',
+    questions: ['salt-of-table to answer'],
+  },
+  {
     file: 'spanish.csv', cut: 'semicolon utf-8 ,', form: 'long', head: [1, null], counts: [4, 3, 0, 0, 1],
     columns: 'salt, concentration mmol/L, cloud-point °C, uncertainty K, note',
     problems: ['5 kept summary-row'],
@@ -229,6 +242,11 @@ export const understoodFiles: readonly ExpectedFile[] = [
   {
     file: 'unclosed-quote.csv', cut: 'csv utf-8 .', form: 'long', head: [1, null], counts: [3, 3, 0, 0, 0],
     columns: 'salt, concentration mol/L, cloud-point °C, note',
+  },
+  {
+    file: 'unknown-headings.csv', cut: 'csv utf-8 .', form: 'long', head: [1, null], counts: [3, 3, 0, 0, 0],
+    columns: 'salt, concentration mol/L, cloud-point °C, note',
+    questions: ['concentration-unit 1 mol/L assumed'],
   },
   {
     file: 'utf-16be-bom.csv', cut: 'csv utf-16be .', form: 'long', head: [1, null], counts: [5, 5, 0, 0, 0],

@@ -105,6 +105,22 @@ describe('what a person says about columns', () => {
   })
 })
 
+describe('remarks on the whole file', () => {
+  it('name columns that were read by their values, until a person has looked', () => {
+    const first = understandFile('unknown-headings.csv')
+    expect(first.remarks).toEqual([expect.stringMatching(/“Probe”, “Menge”, “Messwert” are read by what the column holds/)])
+    expect(understandFile('unknown-headings.csv', { columns: first.columns }).remarks).toEqual([])
+  })
+
+  it('name columns that stay behind because another was taken', () => {
+    expect(understandFile('criteria.csv').remarks).toEqual([expect.stringContaining('“T50 (°C)”, “T90 (°C)” stay with the file')])
+  })
+
+  it('say that there is no header', () => {
+    expect(understandFile('no-header.csv').remarks).toEqual([expect.stringContaining('No header was found')])
+  })
+})
+
 describe('signatureOf', () => {
   it('is the same for files of one kind and another for others', () => {
     const [one, two, other] = ['Salt\tc (M)\tT (°C)\nNaCl\t0.1\t30.4\n', 'salt \t c (M)\tT  (°C)\nNaBr\t0.2\t31.4\n', 'salt\tc (mM)\tT (°C)\nNaCl\t100\t30.4\n'].map(text => signatureOf(understandText(text)))
