@@ -92,6 +92,6 @@ export function understand(grid: Grid, choices: TableChoices, context: TableCont
     headerRow: head.header?.number ?? null, unitsRow: head.units?.number ?? null,
     columns: plan.columns.map(publicColumn), rows, counts: countsOf(rows),
     questions: [...questions, ...batchQuestions(compared.flatMap(({ readings }) => readings), context.batches, choices)],
-    remarks: remarksOf(head, plan),
+    remarks: remarksOf(head, plan, rows.flatMap(({ readings }) => readings), context.clouds),
   }
 }

@@ -116,6 +116,11 @@ describe('remarks on the whole file', () => {
     expect(understandFile('criteria.csv').remarks).toEqual([expect.stringContaining('“T50 (°C)”, “T90 (°C)” stay with the file')])
   })
 
+  it('say which branch does not enter the fit', () => {
+    expect(understandFile('branches.csv').remarks).toEqual(['2 readings were taken on cooling; the campaign clouds on heating. They are kept and drawn, and do not enter the fit.'])
+    expect(understandFile('branches.csv', {}, { clouds: 'on-cooling' }).remarks).toEqual([expect.stringMatching(/^3 readings were taken on heating/)])
+  })
+
   it('say that there is no header', () => {
     expect(understandFile('no-header.csv').remarks).toEqual([expect.stringContaining('No header was found')])
   })
