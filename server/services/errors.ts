@@ -26,17 +26,21 @@ interface Details {
   faults?: readonly Fault[]
   /** Seconds until it is worth trying again. */
   retryAfter?: number
+  /** With a conflict: the newer state. */
+  current?: unknown
 }
 
 /** A refusal with a sentence for the person who asked. */
 export class ServiceError extends Error {
   readonly faults: readonly Fault[]
   readonly retryAfter: number | undefined
+  readonly current: unknown
 
-  constructor(readonly code: Refusal, detail: string, { faults = [], retryAfter }: Details = {}) {
+  constructor(readonly code: Refusal, detail: string, { faults = [], retryAfter, current }: Details = {}) {
     super(detail)
     this.name = 'ServiceError'
     this.faults = faults
     this.retryAfter = retryAfter
+    this.current = current
   }
 }

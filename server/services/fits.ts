@@ -3,10 +3,12 @@ import { desc, eq, inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import { ScienceError } from '#shared/science/errors'
 import { fit as fitPoints, supportOf } from '#shared/science/fitting'
+import type { FitChoice } from '#shared/contracts/series'
 import type { FitRequest, FitResult, ModelName, Point } from '#shared/science/fitting/types'
 import { engine } from '#shared/science/version'
 import type { Transaction } from '~~/server/database/client'
 import { fit, fitBlank, fitResult, fitRevision, series, type FitOptions } from '~~/server/database/schema'
+import { ServiceError } from './errors'
 import { contentOf, type SeriesContent } from './series-content'
 
 /** The readings that enter a fit, with the blanks of their batches. */
@@ -19,6 +21,12 @@ export function pointsOf({ readings }: SeriesContent): Point[] {
 /** Readings with their numbers of samples are weighted by them; otherwise the engine's default holds. */
 export function usualOptions(points: readonly Point[]): FitOptions {
   return points.every(point => point.n !== undefined) ? { weighting: 'replicates' } : {}
+}
+
+/** A choice that says something about weights says all of it. */
+function optionsFor(points: readonly Point[], choice: FitChoice | null): FitOptions {
+  const { weighting, sdMeaning } = choice?.options ?? {}
+  return weighting || sdMeaning ? choice!.options : { ...usualOptions(points), ...choice?.options }
 }
 
 /** Three places on the axis cannot tell a line from a curve: nobody would quote a constant from them. */
@@ -40,10 +48,30 @@ export async function fitSeries(tx: Transaction, who: string, id: string): Promi
   const points = content ? pointsOf(content) : []
   if (!content?.revision || new Set(points.map(({ x }) => x)).size < fewestPlaces) return null
   const { choice } = content.revision
-  const options = { ...usualOptions(points), ...choice?.options }
+  const options = optionsFor(points, choice)
   const model = choice?.model ?? supportedModel(points, options)
   const result = attemptFit({ ...options, model, points })
   return result ? keepFit(tx, who, id, content, { model, options, result }) : null
+}
+
+/**
+ * Whether the newest revision can be fitted as it asks. Too few readings are no fault of the choice.
+ *
+ * @throws ServiceError 'invalid' with what the engine finds wrong with the options
+ */
+export async function checkChoice(tx: Transaction, id: string): Promise<void> {
+  const content = (await contentOf(tx, [id])).get(id)!
+  const choice = content.revision?.choice
+  const points = pointsOf(content)
+  if (!choice) return
+  try {
+    fitPoints({ ...optionsFor(points, choice), model: choice.model ?? 'linear', points })
+  }
+  catch (error) {
+    if (!(error instanceof ScienceError)) throw error
+    const faults = error.problems.filter(({ path }) => !path.startsWith('points')).map(({ path, message }) => ({ path: path === 'model' ? 'choice.model' : `choice.options.${path}`, message }))
+    if (faults.length > 0) throw new ServiceError('invalid', 'The fit cannot be made as asked; nothing was kept.', { faults })
+  }
 }
 
 /** A fit, or nothing where the readings are too few for the model. */

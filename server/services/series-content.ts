@@ -1,8 +1,8 @@
-import { asc, desc, eq, inArray, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import type { FitChoice, Series } from '#shared/contracts/series'
 import type { Transaction } from '~~/server/database/client'
-import { batch, batchRevision, batchRevisionReading, campaign, person, reading, revisionReading, series, seriesRevision, upload } from '~~/server/database/schema'
+import { batch, batchRevision, batchRevisionReading, campaign, fit, fitBlank, fitRevision, person, reading, revisionReading, series, seriesRevision, upload } from '~~/server/database/schema'
 
 type ListedReading = Series['readings'][number]
 
@@ -28,12 +28,15 @@ const originUpload = sql`(${reading.origin} ->> 'upload')::uuid`
 interface Pinned { revision: string, batch: string | null, batchLabel: string | null, batchDay: string | null, reason: string | null, by: string | null, at: Date | null }
 type Row = Pinned & Omit<Awaited<ReturnType<typeof pinnedReadings>>[number], keyof Pinned>
 
+const heads = {
+  id: seriesRevision.id, series: seriesRevision.series, number: seriesRevision.number, choice: seriesRevision.choice, clouds: campaign.clouds,
+}
+
 /** Reads the newest revisions of many series in three queries. */
 export async function contentOf(tx: Transaction, ids: readonly string[]): Promise<Map<string, SeriesContent>> {
   if (ids.length === 0) return new Map()
-  const revisions = await tx.selectDistinctOn([seriesRevision.series], {
-    id: seriesRevision.id, series: seriesRevision.series, number: seriesRevision.number, choice: seriesRevision.choice, clouds: campaign.clouds,
-  }).from(seriesRevision).innerJoin(series, eq(series.id, seriesRevision.series)).innerJoin(campaign, eq(campaign.id, series.campaign))
+  const revisions = await tx.selectDistinctOn([seriesRevision.series], heads)
+    .from(seriesRevision).innerJoin(series, eq(series.id, seriesRevision.series)).innerJoin(campaign, eq(campaign.id, series.campaign))
     .where(inArray(seriesRevision.series, [...ids]))
     .orderBy(seriesRevision.series, desc(seriesRevision.number))
   const own: Row[] = await pinnedReadings(tx, revisions.map(({ id }) => id))
@@ -42,6 +45,23 @@ export async function contentOf(tx: Transaction, ids: readonly string[]): Promis
     const revision = revisions.find(one => one.series === id)
     return [id, assemble(revision, own.filter(row => row.revision === revision?.id), blanks)]
   }))
+}
+
+/** The newest state of a batch's blanks. */
+export async function blanksIn(tx: Transaction, of: string): Promise<ListedReading[]> {
+  const [head] = await tx.select({ clouds: campaign.clouds }).from(batch).innerJoin(campaign, eq(campaign.id, batch.campaign)).where(eq(batch.id, of))
+  const rows: Row[] = await blanksOf(tx, [of])
+  return rows.map((row, index) => ({ ...readingOf(row, branchOf(head!.clouds)), number: index + 1, blank: true }))
+}
+
+/** One revision with its own readings and the blanks its newest fit used; undefined where there is none of that number. */
+export async function earlierContent(tx: Transaction, id: string, number: number): Promise<SeriesContent | undefined> {
+  const [revision] = await tx.select(heads)
+    .from(seriesRevision).innerJoin(series, eq(series.id, seriesRevision.series)).innerJoin(campaign, eq(campaign.id, series.campaign))
+    .where(and(eq(seriesRevision.series, id), eq(seriesRevision.number, number)))
+  if (!revision) return undefined
+  const own: Row[] = await pinnedReadings(tx, [revision.id])
+  return assemble(revision, own, await blanksFitted(tx, revision.id))
 }
 
 function pinnedReadings(tx: Transaction, revisions: string[]) {
@@ -73,12 +93,25 @@ function blanksOf(tx: Transaction, batches: string[]) {
     .orderBy(asc(batch.measuredOn), asc(batch.id), asc(batchRevisionReading.number))
 }
 
+/** The blanks that the newest fit of a revision used. */
+async function blanksFitted(tx: Transaction, revision: string): Promise<Row[]> {
+  const newest = tx.select({ id: fit.id }).from(fit).innerJoin(fitRevision, eq(fitRevision.fit, fit.id))
+    .where(eq(fitRevision.revision, revision)).orderBy(desc(fit.createdAt), desc(fit.id)).limit(1)
+  const rows = await tx.select({ ...fields, revision: sql<string>`''` }).from(fitBlank)
+    .innerJoin(reading, eq(reading.id, fitBlank.reading))
+    .leftJoin(earlier, eq(earlier.id, reading.replaces))
+    .leftJoin(upload, eq(upload.id, originUpload))
+    .innerJoin(batch, eq(batch.id, reading.batch))
+    .where(eq(fitBlank.fit, newest)).orderBy(asc(batch.measuredOn), asc(batch.id), asc(reading.id))
+  return rows.map(row => ({ ...row, reason: null, at: null, by: null }))
+}
+
 interface Revision { id: string, number: number, choice: FitChoice | null, clouds: typeof campaign.$inferSelect.clouds }
 
 function assemble(revision: Revision | undefined, own: Row[], allBlanks: Row[]): SeriesContent {
   const batches = new Set(own.map(row => row.batch))
   const blanks = allBlanks.filter(row => batches.has(row.batch))
-  const branch = revision?.clouds === 'on-cooling' ? 'cooling' : 'heating'
+  const branch = branchOf(revision?.clouds)
   const listed = [...blanks.map(row => ({ row, blank: true })), ...own.map(row => ({ row, blank: false }))]
   const days = own.flatMap(row => row.batchDay ?? []).sort()
   return {
@@ -88,6 +121,8 @@ function assemble(revision: Revision | undefined, own: Row[], allBlanks: Row[]):
     blankRevisions: [...new Set(blanks.map(row => row.revision))].sort(),
   }
 }
+
+const branchOf = (clouds: Revision['clouds'] | undefined) => clouds === 'on-cooling' ? 'cooling' : 'heating'
 
 function readingOf(row: Row, branch: 'heating' | 'cooling'): Omit<ListedReading, 'number' | 'blank'> {
   const { id, x, y, sd, n, direction, limit, note, batch, batchLabel, reason, by, at, changeReason, changeWords } = row

@@ -25,7 +25,10 @@ const outageWait = 5
 
 /** Any error as RFC 9457 problem details; what is not a refusal becomes a 500 with a reference and no internals. */
 export function problemOf(error: unknown): { problem: Problem, retryAfter?: number } {
-  if (error instanceof ServiceError) return { problem: refusal(error.code, error.message, error.faults), retryAfter: error.retryAfter }
+  if (error instanceof ServiceError) {
+    const { code, message, faults, retryAfter, current } = error
+    return { problem: { ...refusal(code, message, faults), ...(current !== undefined && { current }) }, retryAfter }
+  }
   if (error instanceof ScienceError) {
     return { problem: refusal('invalid', countSentence(error.problems.length), error.problems) }
   }

@@ -7,6 +7,7 @@ export const problemContract = z.object({
   status: z.number().int(),
   detail: z.string(),
   reference: z.string().optional().describe('number to quote when the fault is ours'),
+  current: z.unknown().optional().describe('with 409: the newer state, as the address gives it'),
   errors: z.array(z.object({ path: z.string(), row: z.number().int().optional(), message: z.string() })),
 })
 export type Problem = z.infer<typeof problemContract>

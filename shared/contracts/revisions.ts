@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { id, instant } from './common'
 import { fitResultContract } from './fit'
 import { requiredText, text } from './forms'
-import { changeReasons, directions, fitChoiceContract, readingContract, readingLimits } from './series'
+import { changeReasons, directions, fitChoiceContract, readingContract, readingLimits, revisionContract } from './series'
 
 const concentration = z.number('must be a number').min(0, 'must be 0 or more')
 const cloudPoint = z.number('must be a number').min(-20, 'must be −20 °C or more').max(150, 'must be at most 150 °C')
@@ -46,6 +46,12 @@ export type NewRevision = z.infer<typeof newRevisionContract>
 
 export const newBlanksContract = z.strictObject({ from, changes: z.array(changeContract).min(1).max(500) })
 
+/** The blanks of a batch, shared by its series. */
+export const blanksContract = z.object({
+  id, label: z.string(), measuredOn: z.iso.date().nullable(), blanks: z.array(readingContract), revisions: z.array(revisionContract),
+})
+export type Blanks = z.infer<typeof blanksContract>
+
 /** One revision with what it held and how it was fitted, as two of them are compared. */
 export const seriesStateContract = z.object({
   number: z.number().int(), summary: z.string(), by: z.string(), at: instant,
@@ -60,6 +66,7 @@ export const revisionParams = z.object({ series: id, revision: z.coerce.number()
 export const draftContract = z.object({ from: z.number().int().nullable(), content: z.json(), updatedAt: instant })
 export const keepDraftContract = z.strictObject({ from: z.number().int().nullable(), content: z.json() })
 export type Draft = z.infer<typeof draftContract>
+export const draftAnswerContract = z.object({ draft: draftContract.nullable() })
 
 export const exportFormats = ['csv', 'xlsx', 'md', 'tex'] as const
 export const exportContents = ['readings', 'constants'] as const
@@ -67,3 +74,5 @@ export const exportQuery = z.object({
   format: z.enum(exportFormats).default('csv'),
   of: z.enum(exportContents).default('readings').describe('md and tex give constants'),
 })
+
+export const seriesStockContract = z.strictObject({ stock: id.nullable() })

@@ -99,7 +99,7 @@ export const supportContract = z.object({
 export const fitChoiceContract = z.strictObject({
   model: z.enum(modelNames).nullable().describe('null: the form that the readings support'),
   options: fitRequestContract.pick({ parameters: true, weighting: true, sdMeaning: true, confidence: true, intervals: true }),
-})
+}).refine(({ model, options }) => model !== null || !options.parameters, { path: ['options', 'parameters'], message: 'need a model to be parameters of' })
 export type FitChoice = z.infer<typeof fitChoiceContract>
 
 export const seriesContract = z.object({

@@ -82,7 +82,7 @@ describe.each(operations)('$method $path ($rule)', ({ method, path, rule }) => {
   it.each(visitors)('answers as its rule says to: %s', async (visitor) => {
     // Signing in and out would end the sessions this test stands on.
     const agent = path.startsWith('/api/auth/') ? nobody() : agents.get(visitor)!
-    const place = path.replace(/\{(\w+)\}/g, (_, name: string) => places[name] ?? '')
+    const place = path.replace(/\{(\w+)\}/g, (_, name: string) => places[name] ?? '1')
     const status = await statusOf(agent, method, place)
     const outcome = expected[rule]![visitor]
     if (outcome === 'in') expect([401, 403, 404]).not.toContain(status)
