@@ -6,6 +6,7 @@ import { groupProblems } from './rows/group-problems'
 import { headOf, type Head } from './columns/head'
 import { keptFinding } from './rows/kept-rows'
 import { columnFor, type Plan } from './columns/plan'
+import { widthOf } from './columns/width'
 import { planTable } from './columns/planning'
 import { refuseContent } from './refuse-content'
 import { remarksOf } from './remarks'
@@ -60,13 +61,6 @@ function draftsOf(head: Head, plan: Plan, width: number, choices: TableChoices):
 
 function publicColumn({ index, header, meaning, unit, direction, salt, uncertaintyMeaning, of }: TableColumn): TableColumn {
   return { index, header, meaning, unit, direction, salt, uncertaintyMeaning, of }
-}
-
-function widthOf(grid: Grid, head: Head): number {
-  const rows = [head.header, head.group, head.units].filter(row => row !== null)
-  const lastText = (cells: Grid['rows'][number]['cells']) => cells.findLastIndex(({ text }) => text.trim() !== '') + 1
-  if (rows.length > 0) return Math.max(...rows.map(({ cells }) => lastText(cells)))
-  return head.below.reduce((widest, { cells }) => Math.max(widest, lastText(cells)), 0)
 }
 
 /**

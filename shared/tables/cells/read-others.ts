@@ -41,9 +41,12 @@ export function readPlainNumber(cell: ReadCell, column: PlannedColumn, plan: Pla
   return isPossible ? { value: reading.number.value, findings: [] } : without(column.index, 'not-a-number', what, cell.text)
 }
 
+const letters: Readonly<Record<string, NonNullable<FoundReading['direction']>>> = { h: 'heating', c: 'cooling' }
+
 export function readDirection(cell: ReadCell, column: PlannedColumn): Found<NonNullable<FoundReading['direction']>> {
   if (isEmpty(cell)) return nothing
-  const direction = directionOf(fold(cell.text))
+  const word = fold(cell.text)
+  const direction = directionOf(word) ?? letters[word]
   if (direction) return { value: direction, findings: [] }
   return { value: null, findings: [fault(column.index, 'not-a-number', `Not a direction: ${cell.text.trim().slice(0, 60)}`, 'Type heating or cooling, or empty the cell.')] }
 }

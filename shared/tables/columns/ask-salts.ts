@@ -9,6 +9,8 @@ import { ask, optionsOf } from './questions'
 
 const known = sodiumSalts.map(({ formula }) => formula)
 
+const isSalt = (text: string) => saltFormula(text) !== null
+
 /** Salts to choose from, the likeliest first; any other may be typed. */
 const saltOptions = (first: string | null) => optionsOf(first === null ? known : [first, ...known.filter(salt => salt !== first)])
 
@@ -24,7 +26,7 @@ export function settleSalt(columns: readonly HeadedColumn[], head: Head, names: 
   const question = ask({
     code: 'salt-of-table', subject: '', message: 'No column names the salt. Which salt was measured?',
     options: saltOptions(assumed),
-  }, assumed, choices)
+  }, assumed, choices, isSalt)
   return { salt: question.answer === null ? null : saltFormula(question.answer), questions: [question] }
 }
 
@@ -44,7 +46,7 @@ export function settleNearSalts({ columns, questions }: Settled, choices: TableC
   const asked = columns.filter(column => column.meaning === 'cloud-point' && column.nearSalt !== null && !isChosen(column))
   const answers = asked.map(column => ({
     column,
-    question: ask({ code: 'salt-of-table', subject: String(column.index), message: `Which salt does the column “${column.header}” hold?`, options: saltOptions(column.nearSalt) }, null, choices),
+    question: ask({ code: 'salt-of-table', subject: String(column.index), message: `Which salt does the column “${column.header}” hold?`, options: saltOptions(column.nearSalt) }, null, choices, isSalt),
   }))
   const settled = columns.map((column) => {
     const answer = answers.find(other => other.column === column)?.question.answer ?? null

@@ -4,12 +4,12 @@ type Direction = NonNullable<TableColumn['direction']>
 
 /** Headings by what they mean, in English, German, Norwegian, French and Spanish, folded (small letters, no accents). The first that fits holds. */
 const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
-  ['kept', /polymer|\bpnipam\b|mass\b|volume|volumen|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
+  ['kept', /polymer|\bpnipam\b|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
   ['set-aside', /^set aside|^excluded?\b|ausgeschlossen|^exclu|utelatt|^omit|verworfen/],
   ['limit', /^limit|^qualifier|^censor|^grenze$|^grense$|^limite$/],
   ['pH', /^ph\b/],
   ['rate', /\brate\b|heizrate|kuhlrate|\bvitesse\b|velocidad|hastighet|\bramp(?:e)?\b/],
-  ['samples', /^n$|^n [a-z]*$|\bsamples\b|replicates|^(?:number|no|nr|num) of|^anzahl|^antall|^nombre\b|^numero\b|^count$|^proben$|^prover$|messungen|^reps$/],
+  ['samples', /^n$|^n [a-z]*$|\bsamples\b|replicates|^(?:number|no|nr|num) of|^anzahl|^antall|^nombre d(?:e |')(?:mes|essai|rep|ech)|^numero de (?:m|r|e)|^count$|^proben$|^prover$|messungen|^reps$/],
   ['replicate', /^rep$|^rep ?(?:no|nr|#)|^replicate|^replikat|^wiederholung|^parallel+|^essai|^repetition|^repeticion|^replica|^aliquot|^triplicate|^vial$/],
   ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev|dt|δt)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
   ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$|^ionic strength/],
@@ -34,7 +34,7 @@ const directionWords: readonly (readonly [Direction, RegExp])[] = [
 
 /** The direction of temperature that a heading or a cell names. */
 export function directionOf(folded: string): Direction | null {
-  return directionWords.find(([, pattern]) => pattern.test(folded))?.[0] ?? (folded === 'h' ? 'heating' : folded === 'c' ? 'cooling' : null)
+  return directionWords.find(([, pattern]) => pattern.test(folded))?.[0] ?? null
 }
 
 export type UncertaintyWord = { meaning: NonNullable<TableColumn['uncertaintyMeaning']>, isCertain: boolean }

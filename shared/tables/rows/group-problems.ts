@@ -1,12 +1,14 @@
 import type { DraftRow } from './row'
-import type { RowProblem } from '../types'
+import type { ProblemCode, RowProblem } from '../types'
 
-const keyOf = ({ code, tone, column, message, detail, suggestion }: RowProblem) => {
-  // Findings that differ in their numbers alone are one finding.
-  const words = code === 'text-number' || code === 'thousands' || code === 'stated-uncertainty' || code === 'unit-in-cell' || code === 'kelvin' || code === 'fahrenheit' || code === 'date-number' || code === 'formula-like'
-  // Which cells of a row have the other mark does not matter.
-  if (code === 'decimal-comma' || code === 'mixed-decimals') return `${code}|${tone}`
-  return words && tone === 'taken' ? `${code}|${tone}|${column}` : [code, tone, column, message, detail, suggestion].join('|')
+/** Taken all over a column in the same way; only the numbers in their messages differ. */
+const alike = new Set<ProblemCode>(['text-number', 'thousands', 'stated-uncertainty', 'unit-in-cell', 'kelvin', 'fahrenheit', 'date-number', 'formula-like'])
+/** Told of a stretch of rows, whichever of their cells it is. */
+const stretches = new Set<ProblemCode>(['decimal-comma', 'mixed-decimals'])
+
+function keyOf({ code, tone, column, message, detail, suggestion }: RowProblem): string {
+  if (stretches.has(code)) return code
+  return alike.has(code) && tone === 'taken' ? [code, column].join('|') : [code, tone, column, message, detail, suggestion].join('|')
 }
 
 function rowsText(first: number, last: number): string {
@@ -41,10 +43,8 @@ export function groupProblems(drafts: readonly DraftRow[]): DraftRow[] {
     : draft)
 }
 
-const isStretch = (key: string) => key.startsWith('decimal-comma') || key.startsWith('mixed-decimals')
-
 function closeStretches(open: Map<string, RowProblem[]>, present: ReadonlySet<string>): void {
-  for (const key of open.keys()) if (isStretch(key) && !present.has(key)) open.delete(key)
+  for (const code of stretches) if (!present.has(code)) open.delete(code)
 }
 
 function joined(problem: RowProblem, group: readonly RowProblem[] | undefined): RowProblem {

@@ -43,5 +43,5 @@ function saltFor(named: Found<NamedSalt>, found: Measured, { plan, sectionSalt, 
   // Without any column of salts the table's salt is asked for once, not row by row.
   if (!column) return { value: { salt: null }, findings: [] }
   if (saltAbove === null) return { value: null, findings: [fault(column.index, 'no-salt', 'No salt', 'Type the salt, or leave the row out; it is kept with the file either way.')] }
-  return { value: null, findings: [{ ...undecided(column.index, 'no-salt', `No salt; ${saltAbove} stands above`, `Agree if the row belongs to ${saltAbove}, or type the salt.`, saltAbove) }] }
+  return { value: null, findings: [undecided(column.index, 'no-salt', `No salt; ${saltAbove} stands above`, `Agree if the row belongs to ${saltAbove}, or type the salt.`, saltAbove)] }
 }

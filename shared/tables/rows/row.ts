@@ -26,7 +26,7 @@ const noText: ReadCell = { text: '' }
 function cellsOf(row: GridRow, words: RowWords, width: number): ReadCell[] {
   const cells = Array.from({ length: Math.max(width, row.cells.length) }, (_, index): ReadCell => row.cells[index] ?? noText)
   for (const [column, { correction, isLeftOut }] of words.cells) {
-    if (correction !== undefined || isLeftOut) cells[column] = { text: isLeftOut ? '' : correction ?? '', isCorrected: true }
+    if (column < cells.length && (correction !== undefined || isLeftOut)) cells[column] = { text: isLeftOut ? '' : correction ?? '', isCorrected: true }
   }
   return cells
 }

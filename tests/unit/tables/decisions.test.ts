@@ -68,6 +68,10 @@ describe('a decision', () => {
     expect(counts).toEqual({ total: 16, ready: 14, toDecide: 0, unreadable: 0, kept: 2 })
   })
 
+  it('about a cell that is not there changes nothing', () => {
+    expect(labBook({ row: 4, column: 90_000, action: 'correct', value: '1' }).rows).toEqual(labBook().rows)
+  })
+
   it('never changes how many rows there are', () => {
     const actions = ['agree', 'correct', 'leave-out', 'set-aside', 'keep-both', 'reopen'] as const
     for (const action of actions) {

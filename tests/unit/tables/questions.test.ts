@@ -56,6 +56,11 @@ describe('a question', () => {
     expect(readingsOf(understandFile('no-salt.csv', answers(['salt-of-table', '', 'sodium bromide']))).map(({ salt }) => salt)).toEqual([null, 'NaBr', 'NaBr'])
   })
 
+  it('is still open after an answer that is none', () => {
+    expect(questionsOf(understandFile('no-salt.csv', answers(['salt-of-table', '', 'sugar'])))).toEqual(['salt-of-table to answer'])
+    expect(questionsOf(understandFile('no-units.csv', answers(['concentration-unit', '1', 'furlongs'])))).toContain('concentration-unit 1 to answer')
+  })
+
   it('about the salt is not asked where the heading of the concentrations names it', () => {
     const understood = understandText('c(NaCl) / M\tT / °C\n0\t31\n0.1\t30.4\n')
     expect(questionsOf(understood)).toEqual([])
@@ -131,5 +136,6 @@ describe('signatureOf', () => {
     const [one, two, other] = ['Salt\tc (M)\tT (°C)\nNaCl\t0.1\t30.4\n', 'salt \t c (M)\tT  (°C)\nNaBr\t0.2\t31.4\n', 'salt\tc (mM)\tT (°C)\nNaCl\t100\t30.4\n'].map(text => signatureOf(understandText(text)))
     expect(one).toBe(two)
     expect(one).not.toBe(other)
+    expect(signatureOf(understandText('Salt\tc (M)\tT (°C)\nNaCl\t0.1\t30.4\tslow\n'))).toBe(one)
   })
 })

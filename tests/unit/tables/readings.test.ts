@@ -77,6 +77,22 @@ describe('readings', () => {
   })
 })
 
+describe('words behind the last heading', () => {
+  it('are a note', () => {
+    const understood = understandText('salt,c (M),T (°C)\nNaCl,0.1,30.4,slow ramp\nNaCl,0.2,29.9\n')
+    expect(readingsOf(understood).map(({ note }) => note)).toEqual(['slow ramp', null])
+    expect(problemsOf(understood)).toEqual([])
+  })
+
+  it('are not, where numbers stand there: cells may have slipped', () => {
+    expect(problemsOf(understandText('salt,c (M),T (°C)\nNaCl,0,1,30.4\nNaCl,0.2,29.9\n'))).toEqual(['2 decide ragged'])
+  })
+
+  it('and numbers, too, stay with the file where columns cannot slip', () => {
+    expect(problemsOf(understandText('salt\tc (M)\tT (°C)\nNaCl\t0.1\t30.4\t17\nNaCl\t0.2\t29.9\n'))).toEqual([])
+  })
+})
+
 describe('a sheet', () => {
   const head = ['salt', 'conc (M)', 'T (°C)', 'date', 'note']
 

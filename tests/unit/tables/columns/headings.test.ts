@@ -24,7 +24,7 @@ describe('meaningOf', () => {
     ['cloud-point', ['cloud point', 'Tcp', 'T_cp', 'T', 'T1', 'CP', 'LCST', 'Trübungspunkt', 'Trübungstemperatur', 'uklarhetspunkt', 'point de trouble', 'température de trouble', 'punto de turbidez', 'Temperatur', 'Tcloud', 'temp.']],
     ['salt', ['salt', 'Salz', 'sel', 'sal', 'anion', 'salt name', 'compound', 'electrolyte']],
     ['uncertainty', ['±', '+/-', 'u', 'sd', 'SD', 's', 'std', 'stdev', 'StdAbw', 'Standardabweichung', 'SE', 'SEM', 'error', 'err', 'Fehler', 'Unsicherheit', 'u(T)', 'T error', 'écart-type', 'incertitude', 'incertidumbre', 'desviación estándar', 'usikkerhet', 'standardavvik', 'sd heating']],
-    ['samples', ['n', 'samples', 'replicates', 'number of samples', 'Anzahl', 'antall', 'nombre']],
+    ['samples', ['n', 'samples', 'replicates', 'number of samples', 'Anzahl', 'antall', 'nombre de mesures']],
     ['replicate', ['replicate', 'rep', 'Wiederholung', 'parallell', 'essai']],
     ['batch', ['batch', 'Charge', 'run', 'series', 'lot']],
     ['date', ['date', 'Datum', 'dato', 'fecha', 'measured on', 'measured', 'gemessen am', 'målt']],
@@ -33,7 +33,7 @@ describe('meaningOf', () => {
     ['pH', ['pH', 'pH value']],
     ['note', ['note', 'remarks', 'Bemerkung', 'Anmerkung', 'Kommentar', 'merknad', 'remarque', 'observaciones']],
     ['set-aside', ['set aside because', 'excluded', 'ausgeschlossen']],
-    ['kept', ['polymer concentration', 'Polymerkonzentration', 'No.', 'transmittance', 'mass of salt']],
+    ['kept', ['polymer concentration', 'Polymerkonzentration', 'No.', 'transmittance', 'mass of salt', 'stock conc.', 'time', 'temps']],
   ])('knows headings for %s', (meaning, headings) => {
     expect(headings.map(heading => [heading, meaningOf(headerText(heading).name)])).toEqual(headings.map(heading => [heading, meaning]))
   })
