@@ -63,8 +63,8 @@ export type SeriesState = z.infer<typeof seriesStateContract>
 export const revisionParams = z.object({ series: id, revision: z.coerce.number().int().min(1) })
 
 /** What is typed and not yet kept: any JSON the page can restore itself from. */
-export const draftContract = z.object({ from: z.number().int().nullable(), content: z.json(), updatedAt: instant })
-export const keepDraftContract = z.strictObject({ from: z.number().int().nullable(), content: z.json() })
+export const draftContract = z.object({ from: z.number().int().nullable(), content: z.unknown().describe('any JSON the page can restore itself from'), updatedAt: instant })
+export const keepDraftContract = z.strictObject({ from: z.number().int().nullable(), content: z.unknown().describe('any JSON the page can restore itself from') })
 export type Draft = z.infer<typeof draftContract>
 export const draftAnswerContract = z.object({ draft: draftContract.nullable() })
 
