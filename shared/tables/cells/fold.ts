@@ -10,13 +10,20 @@ export function tidy(text: string): string {
 
 const letters: Readonly<Record<string, string>> = { ß: 'ss', ø: 'o', æ: 'ae', œ: 'oe', đ: 'd', ł: 'l' }
 const folded = new Map<string, string>()
+const longestRemembered = 100
+const mostRemembered = 5_000
 
 /** A word as it is compared: small letters without accents. Remembered, because tables repeat themselves. */
 export function fold(text: string): string {
   const known = folded.get(text)
   if (known !== undefined) return known
-  const result = tidy(text).toLowerCase().normalize('NFD').replace(/[\u0300-\u036F]/g, '').replace(/[ßøæœđł]/g, letter => letters[letter] ?? letter)
-  if (folded.size > 5_000) folded.clear()
+  const result = foldAnew(text)
+  if (text.length > longestRemembered) return result
+  if (folded.size > mostRemembered) folded.clear()
   folded.set(text, result)
   return result
+}
+
+function foldAnew(text: string): string {
+  return tidy(text).toLowerCase().normalize('NFD').replace(/[\u0300-\u036F]/g, '').replace(/[ßøæœđł]/g, letter => letters[letter] ?? letter)
 }

@@ -59,10 +59,15 @@ function withStatedUncertainty(text: string, read: Read): Pick<Quantity, 'number
 
 const certain = { limit: 'exact', isApproximate: false, isFormulaLike: false, uncertainty: null, unit: null } as const
 
+/** Longer texts are remarks; patterns that look back and forth are kept from them. */
+const longest = 80
+
 /** What a cell says where a number is expected. Formulas are never run. */
 export function readQuantity(raw: string, decimal: DecimalMark, mayGroup: boolean): QuantityReading {
-  const text = tidy(raw)
+  const written = raw.trim()
+  const text = written.length > longest ? written : tidy(written)
   if (text === '') return { kind: 'empty' }
+  if (text.length > longest) return { kind: /^[=@]/.test(text) ? 'formula-like' : 'text' }
   const plain = readNumber(text, decimal, mayGroup)
   if (plain) return { kind: 'number', number: plain, mark: plain.mark, isGrouped: plain.isGrouped, ...certain }
   if (notDetermined.has(fold(text))) return { kind: 'not-determined' }

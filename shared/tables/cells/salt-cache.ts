@@ -31,13 +31,16 @@ export function suggestedSalt(text: string): string | null {
   return reading.kind === 'unknown' ? reading.suggestion : null
 }
 
+/** A salt stands at the beginning of a phrase, or not at all. */
+const longestPhrase = 200
+
 /** The salt that a heading, a file name or a remark names among other words; null where there is none. */
 export function saltAmong(text: string): string | null {
-  const parts = tidy(text).split(/[\s_,;:/|[\]="]+/)
+  const parts = tidy(text.slice(0, longestPhrase)).split(/[\s_,;:/|[\]="]+/)
   // c(NaCl) holds a salt inside its brackets, Ca(NO3)2 is one with them.
   const words = [...parts, ...parts.map(part => /^[^()]*\((.+)\)$/.exec(part)?.[1] ?? '')].filter(word => word.length > 1)
   const pairs = words.slice(1).map((word, index) => `${words[index]} ${word}`)
-  for (const candidate of [tidy(text), ...pairs, ...words]) {
+  for (const candidate of [tidy(text.slice(0, longestPhrase)), ...pairs, ...words]) {
     const salt = candidate.length > 40 ? null : saltFormula(candidate)
     if (salt !== null) return salt
   }

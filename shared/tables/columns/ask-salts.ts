@@ -9,6 +9,9 @@ import { ask, optionsOf } from './questions'
 
 const known = sodiumSalts.map(({ formula }) => formula)
 
+/** The salt is named near the top, or not at all. */
+const mostRemarks = 100
+
 const isSalt = (text: string) => saltFormula(text) !== null
 
 /** Salts to choose from, the likeliest first; any other may be typed. */
@@ -21,7 +24,7 @@ export function settleSalt(columns: readonly HeadedColumn[], head: Head, names: 
   if (hasSections(head)) return { salt: null, questions: [] }
   const inHeading = columns.find(({ meaning, salt }) => meaning === 'concentration' && salt !== null)?.salt
   if (inHeading) return { salt: inHeading, questions: [] }
-  const remarks = head.preamble.flatMap(({ cells }) => cells.map(({ text }) => text))
+  const remarks = head.preamble.slice(0, mostRemarks).flatMap(({ cells }) => cells.map(({ text }) => text))
   const assumed = remarks.map(saltAmong).find(salt => salt !== null) ?? names.map(saltInName).find(salt => salt !== null) ?? null
   const question = ask({
     code: 'salt-of-table', subject: '', message: 'No column names the salt. Which salt was measured?',

@@ -11,9 +11,11 @@ function plainName(text: string): string {
   return fold(text).replace(/[_:.]+/g, ' ').replace(/\s+/g, ' ').trim()
 }
 
+const longestHeading = 200
+
 /** Cuts a heading: "c(NaCl) / mol L-1", "Trübungspunkt (°C)", "conc, mM" and a bare "mM". */
 export function headerText(header: string): HeaderText {
-  const text = tidy(header.replace(/\s+/g, ' ')).replace(/^#+\s*/, '').replace(/\*+$/, '')
+  const text = tidy(header.slice(0, longestHeading).replace(/\s+/g, ' ')).replace(/^#+\s*/, '').replace(/\*+$/, '')
   // A lone letter is a symbol more often than a unit: c, m, K. M and mM stand for the concentration itself.
   const whole = text.length === 1 && text !== 'M' ? null : unitOf(text)
   if (whole) return { name: '', unit: whole }

@@ -1,9 +1,10 @@
-import { recordsOf, spacedRecordsOf, widthOf, type Delimiter } from './records'
+import { recordsOf, spacedRecordsOf, widthOf, type Delimiter, type TextRecord } from './records'
 
 const sampleRecords = 200
+const sampleLength = 200_000
 const candidates: readonly Delimiter[] = ['\t', ';', '|', ',', 'space']
 
-export function cutText(text: string, delimiter: Delimiter, most: number): string[][] {
+export function cutText(text: string, delimiter: Delimiter, most: number): TextRecord[] {
   return delimiter === 'space' ? spacedRecordsOf(text, most) : recordsOf(text, delimiter, most)
 }
 
@@ -17,7 +18,7 @@ function isTorn(cell: string, delimiter: Delimiter): boolean {
 
 /** How well a delimiter cuts the text: rows of several cells, of one width, without cells that hold two. */
 function scoreOf(text: string, delimiter: Delimiter): number {
-  const records = cutText(text, delimiter, sampleRecords).filter(cells => cells.some(cell => cell.trim() !== ''))
+  const records = cutText(text, delimiter, sampleRecords).map(({ cells }) => cells).filter(cells => cells.some(cell => cell.trim() !== ''))
   const several = records.filter(cells => cells.length > 1)
   if (several.length === 0) return 0
   const width = widthOf(several.map(cells => cells.length))
@@ -36,7 +37,8 @@ const named = /^\uFEFF?"?sep=(.)"?\s*(?:\r|\n|$)/i
 export function delimiterOf(text: string): Delimiter | null {
   const stated = candidates.find(candidate => candidate === named.exec(text)?.[1])
   if (stated) return stated
-  const scores = candidates.map(candidate => ({ candidate, score: scoreOf(text, candidate) }))
+  const sample = text.slice(0, sampleLength)
+  const scores = candidates.map(candidate => ({ candidate, score: scoreOf(sample, candidate) }))
   const best = scores.reduce((first, next) => next.score > first.score + 1e-9 ? next : first)
   return best.score > 0 ? best.candidate : null
 }

@@ -70,6 +70,25 @@ function expectAllAccountedFor(bytes: Uint8Array, chosen: TableChoices) {
   }
 }
 
+/** Texts on which careless patterns and searches take for ever; each is as large as a file may be, or nearly. */
+const hostile: Record<string, string> = {
+  'a cell of quotes': `a,b\nx${'"'.repeat(4_000_000)},1\n`,
+  'quotes that open and never close': `a,b\n${'"x,'.repeat(1_000_000)}\n`,
+  'empty lines and a word': `${'\n'.repeat(8_000_000)}a,b\n1,2\n`,
+  'a gap of spaces': `c T\n1${' '.repeat(8_000_000)}2\n`,
+  'brackets and ±': `salt,c (M),T\nNaCl,0.1,${'(±'.repeat(500_000)}\nNaCl,0.2,30\n`,
+  'digits in groups': `salt,c (M),T\nNaCl,0.1,${'1 '.repeat(1_000_000)}x\nNaCl,0.2,30\n`,
+  'brackets in a heading': `salt,c (M),T ${'(['.repeat(500_000)}\nNaCl,0.2,30\n`,
+  'a remark of many words': `${'cation anion '.repeat(200_000)}\nc (M),T\n0.2,30\n`,
+  'digits that could be joined in many ways': `a${',a'.repeat(59)}\n${`${'1,'.repeat(80)}a,05\n`.repeat(50)}`,
+}
+
+describe('a hostile text', () => {
+  it.each(Object.entries(hostile))('of %s is answered', (_, text) => {
+    expectAllAccountedFor(new TextEncoder().encode(text), {})
+  })
+})
+
 describe('a good file cut, shuffled, doubled and corrupted', () => {
   it('is refused in words or has every row accounted for', () => {
     fc.assert(fc.property(fc.constantFrom(...files), fc.array(damage, { minLength: 1, maxLength: 4 }), choices, fc.boolean(), (file, spoiled, chosen, isChosen) => {
