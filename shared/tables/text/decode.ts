@@ -51,6 +51,12 @@ function isBinary(text: string): boolean {
   return controls > sample.length * 0.01
 }
 
+/** Some instruments save a web page under the name of a spreadsheet. */
+function refuseMarkup(text: string): void {
+  if (!/^\uFEFF?\s{0,100}<(?:!doctype|html|\?xml|table)\b/i.test(text.slice(0, 200))) return
+  throw new TableError('not-a-table', 'This is a web page or XML, whatever its name ends in. Open it in your spreadsheet and save it as .xlsx or CSV.')
+}
+
 function decodeChosen(bytes: Uint8Array, encoding: Encoding): string {
   try {
     return decodeAs(bytes, encoding)
@@ -78,5 +84,6 @@ function recognised(bytes: Uint8Array): { text: string, encoding: Encoding } {
 export function decodeText(bytes: Uint8Array, choice: TableChoices['encoding']): { text: string, encoding: Encoding } {
   const result = choice ? { text: decodeChosen(bytes, choice), encoding: choice } : recognised(bytes)
   if (isBinary(result.text)) throw notText()
+  refuseMarkup(result.text)
   return result
 }

@@ -10,6 +10,7 @@ export const refusedFiles: readonly { file: string, code: string }[] = [
   { file: 'one-column.csv', code: 'one-column' },
   { file: 'pdf-renamed.csv', code: 'pdf' },
   { file: 'picture-renamed.csv', code: 'not-a-table' },
+  { file: 'web-page.csv', code: 'not-a-table' },
   { file: 'zip-renamed.csv', code: 'not-a-table' },
 ]
 
