@@ -1,3 +1,4 @@
+// A table's way: text/ cuts a file into cells, columns/ finds what the columns hold, readers/ reads a cell as its column says (with cells/, which knows no columns), rows/ makes readings of them.
 import { batchQuestions, type KnownBatch } from './rows/batch-questions'
 import { branchesOf } from './columns/branches'
 import { wordsByRow } from './rows/decisions'

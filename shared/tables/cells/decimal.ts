@@ -9,6 +9,7 @@ export interface Decimal {
 /** More digits than this are the dust of a calculation. */
 const mostDigits = 15
 
+/** A number of digits as JavaScript reads them. */
 export function decimalOf(text: string): Decimal {
   const [mantissa = '', exponent = '0'] = text.toLowerCase().split('e')
   const point = mantissa.indexOf('.')

@@ -9,6 +9,7 @@ export interface Branch {
   uncertainty: PlannedColumn | undefined
 }
 
+/** The cloud points that one row can hold, by salt and branch. */
 export function branchesOf(plan: Plan): Branch[] {
   const points = columnsFor(plan, 'cloud-point')
   const uncertainties = columnsFor(plan, 'uncertainty')

@@ -66,6 +66,7 @@ function spread(row: GridRow | null, width: number): string[] {
   return texts
 }
 
+/** What the head says about each column. */
 export function headedColumns({ header, units, group }: Head, width: number): HeadedColumn[] {
   const over = spread(group, width)
   return Array.from({ length: width }, (_, index) => {

@@ -1,8 +1,8 @@
 import type { Branch } from '../columns/branches'
 import { spreadOf, type Decimal } from '../cells/decimal'
-import { taken, type Finding, type ReadCell } from '../cells/finding'
+import { taken, type Finding, type ReadCell } from '../readers/finding'
 import type { Plan, PlannedColumn } from '../columns/plan'
-import { readTemperature, readUncertainty, type Temperature } from '../cells/read-temperature'
+import { readTemperature, readUncertainty, type Temperature } from '../readers/temperature'
 import type { FoundReading } from '../types'
 
 /** A cloud point with its uncertainty, before the rest of its row is known. */
@@ -17,7 +17,7 @@ const withoutDust = (value: number) => Number(value.toPrecision(12))
  * The uncertainty as it is used: a standard uncertainty as it stands, a standard deviation of n replicates by √n.
  * Without n the standard deviation is kept as given and gives no standard uncertainty.
  */
-export function spreadFrom(given: number | null, meaning: FoundReading['sdMeaning'], n: number | null): Spread {
+function spreadFrom(given: number | null, meaning: FoundReading['sdMeaning'], n: number | null): Spread {
   if (given === null) return { sd: null, sdGiven: null, sdMeaning: null }
   if (meaning !== 'sd-of-replicates') return { sd: given, sdGiven: given, sdMeaning: meaning }
   return { sd: n === null ? null : withoutDust(given / Math.sqrt(n)), sdGiven: given, sdMeaning: meaning }

@@ -1,5 +1,5 @@
 import type { Branch } from '../columns/branches'
-import { taken } from '../cells/finding'
+import { taken } from '../readers/finding'
 import type { DraftRow } from './row'
 import type { FoundReading } from '../types'
 

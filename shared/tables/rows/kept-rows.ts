@@ -1,10 +1,11 @@
 import { fold } from '../cells/fold'
 import type { Head } from '../columns/head'
 import { isSummaryWord } from '../columns/header-words'
-import type { Finding, ReadCell } from '../cells/finding'
+import type { Finding, ReadCell } from '../readers/finding'
 import { columnFor, type Plan } from '../columns/plan'
 import type { GridRow } from '../types'
 
+/** Why a row is no reading. */
 export function keptFinding(code: Finding['code'], message: string, detail: string, column: number | null = null): Finding {
   return { column, code, tone: 'kept', message, detail }
 }

@@ -1,5 +1,5 @@
 import type { Branch } from '../columns/branches'
-import type { Finding } from '../cells/finding'
+import type { Finding } from '../readers/finding'
 import type { Head } from '../columns/head'
 import type { Plan } from '../columns/plan'
 import type { FoundReading } from '../types'

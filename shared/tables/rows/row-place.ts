@@ -1,9 +1,9 @@
 import type { Point } from './branch-reading'
 import type { Branch } from '../columns/branches'
-import { fault, undecided, type Finding, type Found } from '../cells/finding'
+import { fault, undecided, type Finding, type Found } from '../readers/finding'
 import { columnFor, type Plan } from '../columns/plan'
-import type { Concentration } from '../cells/read-concentration'
-import type { NamedSalt } from '../cells/read-salt-cell'
+import type { Concentration } from '../readers/concentration'
+import type { NamedSalt } from '../readers/salt'
 import type { RowContext } from './row-context'
 
 export interface Place { x: number, scale: Concentration['scale'], salt: string | null }

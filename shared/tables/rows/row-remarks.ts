@@ -1,4 +1,4 @@
-import { hasOtherMark, quantityOf, quoted, taken, type Finding, type ReadCell } from '../cells/finding'
+import { hasOtherMark, quantityOf, quoted, taken, type Finding, type ReadCell } from '../readers/finding'
 import { isMeasured, type Plan } from '../columns/plan'
 import type { RowContext } from './row-context'
 import type { GridRow } from '../types'

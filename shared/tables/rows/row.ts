@@ -1,5 +1,5 @@
 import { noWords, type RowWords, type Words } from './decisions'
-import type { Finding, ReadCell } from '../cells/finding'
+import type { Finding, ReadCell } from '../readers/finding'
 import { keptFinding, keptRow } from './kept-rows'
 import { columnFor } from '../columns/plan'
 import type { RowContext, RowReading } from './row-context'

@@ -1,4 +1,4 @@
-import { undecided } from '../cells/finding'
+import { undecided } from '../readers/finding'
 import { keptFinding } from './kept-rows'
 import type { DraftRow } from './row'
 import type { FoundReading } from '../types'

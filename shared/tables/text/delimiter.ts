@@ -4,6 +4,7 @@ const sampleRecords = 200
 const sampleLength = 200_000
 const candidates: readonly Delimiter[] = ['\t', ';', '|', ',', 'space']
 
+/** Cuts a text into records at a delimiter. */
 export function cutText(text: string, delimiter: Delimiter, most: number): TextRecord[] {
   return delimiter === 'space' ? spacedRecordsOf(text, most) : recordsOf(text, delimiter, most)
 }

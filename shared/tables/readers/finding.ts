@@ -1,6 +1,6 @@
-import { readQuantity, type QuantityReading } from './quantity'
-import { decimalOfDouble } from './decimal'
-import { numbersBehindDate } from './dates'
+import { readQuantity, type QuantityReading } from '../cells/quantity'
+import { decimalOfDouble } from '../cells/decimal'
+import { numbersBehindDate } from '../cells/dates'
 import type { Plan, PlannedColumn } from '../columns/plan'
 import type { GridCell, RowProblem } from '../types'
 
@@ -12,14 +12,17 @@ export interface Found<T> { value: T | null, findings: Finding[] }
 
 export const nothing: { value: null, findings: Finding[] } = { value: null, findings: [] }
 
+/** Something that cannot be read; a suggestion is what the cell may have meant. */
 export function fault(column: number | null, code: Finding['code'], message: string, detail: string, suggestion?: string): Finding {
   return { column, code, tone: 'fault', message, detail, ...(suggestion === undefined ? {} : { suggestion }) }
 }
 
+/** Something that was read as the message says. */
 export function taken(column: number | null, code: Finding['code'], message: string, detail: string, suggestion?: string): Finding {
   return { ...fault(column, code, message, detail, suggestion), tone: 'taken' }
 }
 
+/** Something that waits for a person. */
 export function undecided(column: number | null, code: Finding['code'], message: string, detail: string, suggestion?: string): Finding {
   return { ...fault(column, code, message, detail, suggestion), tone: 'decide' }
 }

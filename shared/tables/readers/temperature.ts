@@ -1,8 +1,8 @@
-import { celsiusOfFahrenheit, celsiusOfKelvin, decimalOfDouble, kelvinOfFahrenheitStep, typed, type Decimal } from './decimal'
-import { dayOfSerial } from './dates'
+import { celsiusOfFahrenheit, celsiusOfKelvin, decimalOfDouble, kelvinOfFahrenheitStep, typed, type Decimal } from '../cells/decimal'
+import { dayOfSerial } from '../cells/dates'
 import { dateFinding, fault, nothing, quantityOf, taken, takenFindings, undecided, unreadableNumber, type Finding, type Found, type ReadCell } from './finding'
 import type { Plan, PlannedColumn } from '../columns/plan'
-import type { Quantity } from './quantity'
+import type { Quantity } from '../cells/quantity'
 
 export interface Temperature {
   y: Decimal
@@ -17,12 +17,12 @@ const highest = 100
 const isThinkable = (value: number) => value > -273.15 && value < 1000
 const isInRange = (value: number) => value >= lowest && value <= highest
 
-export function celsiusOf(number: Decimal, unit: string | null): Decimal {
+function celsiusOf(number: Decimal, unit: string | null): Decimal {
   if (unit === 'K') return celsiusOfKelvin(number)
   return unit === '°F' ? celsiusOfFahrenheit(number) : number
 }
 
-export function kelvinStepOf(number: Decimal, unit: string | null): Decimal {
+function kelvinStepOf(number: Decimal, unit: string | null): Decimal {
   return unit === '°F' ? kelvinOfFahrenheitStep(number) : number
 }
 

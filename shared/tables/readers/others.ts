@@ -1,6 +1,6 @@
-import { dayOfSerial, readDate } from './dates'
+import { dayOfSerial, readDate } from '../cells/dates'
 import { fault, nothing, quantityOf, taken, type Finding, type Found, type ReadCell } from './finding'
-import { fold } from './fold'
+import { fold } from '../cells/fold'
 import { directionOf } from '../columns/header-words'
 import type { Plan, PlannedColumn } from '../columns/plan'
 import { dateOrders, type FoundReading } from '../types'

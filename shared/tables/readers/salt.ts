@@ -1,5 +1,5 @@
 import { fault, nothing, taken, undecided, type Found, type ReadCell } from './finding'
-import { saltOf } from './salt-cache'
+import { saltOf } from '../cells/salt-cache'
 
 /** The formula of the anhydrous salt a row names, or null inside for a blank. */
 export interface NamedSalt { salt: string | null }

@@ -1,8 +1,8 @@
-import { movePoint, typed, type Decimal } from './decimal'
+import { movePoint, typed, type Decimal } from '../cells/decimal'
 import { dateFinding, fault, nothing, quantityOf, quoted, taken, takenFindings, unreadableNumber, type Found, type ReadCell } from './finding'
 import type { Plan, PlannedColumn } from '../columns/plan'
-import type { Quantity } from './quantity'
-import { saltOf } from './salt-cache'
+import type { Quantity } from '../cells/quantity'
+import { saltOf } from '../cells/salt-cache'
 
 export type Scale = 'mol/L' | 'mol/kg'
 export interface Concentration { x: Decimal, scale: Scale }
