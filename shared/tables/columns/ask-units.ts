@@ -18,8 +18,8 @@ function concentrationQuestion(column: Valued, choices: TableChoices): Question 
   const { numbers, withUnit } = column.values
   const amounts = numbers.filter(({ value }) => value > 0)
   if (column.unit !== null || amounts.length === 0 || (amounts.length === 0 && withUnit > 0)) return null
-  const isMolar = amounts.every(({ value }) => value <= mostMolar) && amounts.some(({ decimals }) => decimals > 0)
-  const asked = { code: 'concentration-unit' as const, subject: String(column.index), options: optionsOf(concentrationUnits), message: `Which unit are the concentrations ${placeOf(column)} in?` }
+  const isMolar = !column.isForeign && amounts.every(({ value }) => value <= mostMolar) && amounts.some(({ decimals }) => decimals > 0)
+  const asked = { code: 'concentration-unit' as const, subject: String(column.index), options: optionsOf(concentrationUnits), message: column.isForeign ? `The head of the column “${column.header}” states a unit that cannot be converted here. Convert the column in your spreadsheet, or say which unit its numbers are in.` : `Which unit are the concentrations ${placeOf(column)} in?` }
   return ask(asked, isMolar ? 'mol/L' : null, choices)
 }
 

@@ -34,7 +34,7 @@ function oneOfEachBranch(columns: readonly HeadedColumn[]): HeadedColumn[] {
     const members = points.filter(column => branchOf(column) === branch)
     const repeats = members.map(column => repeatsLike(column, members)).find(alike => alike.length > 1)
     // Beside a second column of concentrations stands a table of its own, not a repeat.
-    const same = members.filter(({ name }, place) => place === 0 || (isOneTable && name === members[0]?.name))
+    const same = members.filter(({ name, unit }, place) => place === 0 || (isOneTable && name === members[0]?.name && unit === members[0]?.unit))
     for (const column of repeats ?? same) chosen.add(column)
   }
   return columns.map(column => column.meaning === 'cloud-point' && !chosen.has(column) ? keep(column) : column)

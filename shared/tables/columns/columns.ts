@@ -1,6 +1,6 @@
 import { fold, tidy } from '../cells/fold'
 import { isGroupHeading, type Head } from './head'
-import { headerText } from './header-text'
+import { hasForeignUnit, headerText } from './header-text'
 import { directionOf, meaningOf, uncertaintyWordOf } from './header-words'
 import { saltAmong, suggestedSalt } from '../cells/salt-cache'
 import type { ColumnMeaning, GridRow, TableColumn } from '../types'
@@ -12,6 +12,8 @@ export interface HeadedColumn extends TableColumn {
   name: string
   /** units that its head states, whatever they measure */
   units: readonly Unit[]
+  /** true: its head states an amount in a unit such as g/L, which is not converted */
+  isForeign: boolean
   /** salt that its heading nearly names, to be asked about: an anion alone, a slip of spelling */
   nearSalt: string | null
   /** true: the meaning of its uncertainty leaves no doubt */
@@ -41,14 +43,16 @@ function columnOf(index: number, header: string, unitText: string): HeadedColumn
   const below = unitOf(unitText.replace(/^\s*[([]|[)\]]\s*$/g, ''))
   const meaning = meaningFor(name, stated ?? below, salt ?? nearSalt)
   const units = [below, stated].filter(unit => unit !== null)
-  const word = meaning === 'uncertainty' ? uncertaintyWordOf(name) : null
+  // The sd of "Tcp ± sd" stands in the cloud point's own cells.
+  const spread = meaning === 'uncertainty' ? name : /(?:±|\+\/?-)\s*(.+)$/.exec(name)?.[1]
+  const word = spread === undefined ? null : uncertaintyWordOf(spread)
   const isBranch = meaning === 'cloud-point' || meaning === 'uncertainty'
   return {
     index, header: tidy(header.replace(/\s+/g, ' ')), name, meaning,
     unit: unitFor(meaning, units), units,
     direction: isBranch ? directionOf(name) : null,
     salt: isBranch ? salt ?? nearSalt : meaning === 'concentration' ? salt : null,
-    nearSalt,
+    nearSalt, isForeign: hasForeignUnit(`${header} ${unitText}`),
     uncertaintyMeaning: word?.meaning ?? null,
     isUncertaintyCertain: word?.isCertain ?? false,
     of: null,

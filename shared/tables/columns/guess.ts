@@ -32,7 +32,8 @@ function guessAll(looks: readonly Look[]): Map<ColumnMeaning, number> {
     return look
   }
   const numeric = looks.filter(look => look.share > 0.6 && !look.isDate)
-  const point = guess('cloud-point', numeric.find(({ middle }, place) => place > 0 && middle !== null && middle > smallest) ?? numeric[1])
+  const large = numeric.filter(({ middle }) => middle !== null && middle > smallest)
+  const point = guess('cloud-point', large.find(look => look !== numeric[0]) ?? large[0] ?? numeric[1])
   const concentration = guess('concentration', numeric.find(look => look !== point))
   guess('uncertainty', numeric.find(look => point && look.index > point.index && look.middle !== null && look.middle < smallest && look !== concentration))
   const salt = guess('salt', looks.find(({ isSalt }) => isSalt))
@@ -61,6 +62,8 @@ export function guessMeanings(columns: readonly HeadedColumn[], rows: readonly G
   const some = rows.slice(0, sample)
   const guesses = hasHeader ? guessMissing(columns, some) : guessAll(columns.map(({ index }) => lookAt(some, index)))
   const meanings = new Map([...guesses].map(([meaning, index]) => [index, meaning]))
+  // "Salt added (g)" holds amounts.
+  const isAmount = ({ meaning, index }: HeadedColumn) => meaning === 'salt' && lookAt(some, index).share > 0.6
   const isNote = ({ header, meaning, index }: HeadedColumn) => hasHeader && header === '' && meaning === 'kept' && lookAt(some, index).isText
-  return columns.map(column => ({ ...column, meaning: meanings.get(column.index) ?? (isNote(column) ? 'note' : column.meaning) }))
+  return columns.map(column => ({ ...column, meaning: meanings.get(column.index) ?? (isNote(column) ? 'note' : isAmount(column) ? 'kept' : column.meaning) }))
 }

@@ -1,5 +1,5 @@
 import { fold } from '../cells/fold'
-import { headerText } from './header-text'
+import { hasForeignUnit, headerText } from './header-text'
 import { directionOf, meaningOf } from './header-words'
 import { readQuantity } from '../cells/quantity'
 import { saltAmong, saltFormula, suggestedSalt } from '../cells/salt-cache'
@@ -35,7 +35,7 @@ function headingWeight(text: string): number {
 function isUnitsRow(row: GridRow | undefined): boolean {
   if (!row) return false
   const texts = filled(row).map(cell => cell.text.replace(/^\s*[([]|[)\]]\s*$/g, '').trim())
-  const isUnit = (text: string) => unitOf(text) !== null || /^(?:-|–|1|text|n\/a)$/i.test(text)
+  const isUnit = (text: string) => unitOf(text) !== null || hasForeignUnit(text) || /^(?:-|–|1|text|n\/a)$/i.test(text)
   return texts.some(text => unitOf(text) !== null) && texts.every(isUnit)
 }
 

@@ -4,7 +4,9 @@ type Direction = NonNullable<TableColumn['direction']>
 
 /** Headings by what they mean, in English, German, Norwegian, French and Spanish, folded (small letters, no accents). The first that fits holds. */
 const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
-  ['kept', /polymer|\bpnipam\b|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
+  ['kept', /^(?!.*(?:cloud|trub|lcst|temp|\bt ?cp)).*(?:polymer|pnipam)|^ionic|ionenst|ionestyrke|force ionique|fuerza ionica|\brel\b|relativ|\brsd\b|\bcv\b|^(?:u|sd?|err|error|unc|fehler|uncertainty|unsicherheit)\b.*%|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
+  // "Tcp ± sd" holds both, cell by cell.
+  ['cloud-point', /^t.*\w ?(?:±|\+\/?-) ?\w|^cloud.*(?:±|\+\/?-) ?\w/],
   ['set-aside', /^set aside|^excluded?\b|ausgeschlossen|^exclu|utelatt|^omit|verworfen/],
   ['limit', /^limit|^qualifier|^censor|^grenze$|^grense$|^limite$/],
   ['pH', /^ph\b/],
@@ -12,7 +14,7 @@ const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
   ['samples', /^n$|^n [a-z]*$|\bsamples\b|replicates|^(?:number|no|nr|num) of|^anzahl|^antall|^nombre d(?:e |')(?:mes|essai|rep|ech)|^numero de (?:m|r|e)|^count$|^proben$|^prover$|messungen|^reps$/],
   ['replicate', /^rep$|^rep ?(?:no|nr|#)|^replicate|^replikat|^wiederholung|^parallel+|^essai|^repetition|^repeticion|^replica|^aliquot|^triplicate|^vial$/],
   ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev|dt|δt)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
-  ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$|^ionic strength/],
+  ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$/],
   ['batch', /batch|^charge$|^charge\b|^lot\b|^lote$|^parti|messreihe|^serie$|^series$|^run\b|^lauf$|^set$|^tanda$/],
   ['date', /^date|datum|^dato|fecha|^measured(?: on| at)?$|^gemessen(?: am)?$|^malt(?: den)?$|mesure le|medido|^day$|^tag$|^dag$|^jour$|^dia$|^when$/],
   ['direction', /^direction|richtung|^retning|^sens\b|direccion|^branch|^scan$|^mode$|up ?\/ ?down|heating ?\/ ?cooling|^zweig$/],
@@ -44,6 +46,8 @@ const standardUncertainty = /^su$|^u$|^u ?[c(]|\bsem?\b|std ?err|standard error|
 
 /** What the heading of an uncertainty says it holds; null: it does not say. Only "standard uncertainty" in full leaves no doubt. */
 export function uncertaintyWordOf(name: string): UncertaintyWord | null {
+  // Expanded uncertainties are neither.
+  if (/expanded|erweitert|\bk ?= ?[23]|95/.test(name)) return null
   if (/\bstandard uncertainty\b|standardunsicherheit/.test(name)) return { meaning: 'standard-uncertainty', isCertain: true }
   if (standardUncertainty.test(name)) return { meaning: 'standard-uncertainty', isCertain: false }
   return ofReplicates.test(name) ? { meaning: 'sd-of-replicates', isCertain: false } : null

@@ -3,9 +3,9 @@ import type { Branch } from '../columns/branches'
 import { fault, nothing, quoted, type Finding, type Found, type ReadCell } from '../readers/finding'
 import { keptFinding } from './kept-rows'
 import { columnFor } from '../columns/plan'
-import { readConcentration } from '../readers/concentration'
+import { readConcentration, type Concentration } from '../readers/concentration'
 import { readDateCell, readDirection, readLimit, readPlainNumber, readSamples } from '../readers/others'
-import { readSaltCell } from '../readers/salt'
+import { readSaltCell, type NamedSalt } from '../readers/salt'
 import type { RowContext, RowReading } from './row-context'
 import { placeOf, type Place } from './row-place'
 import { wordsOfRow } from './row-words'
@@ -38,7 +38,7 @@ export function readMeasured(cells: readonly ReadCell[], context: RowContext): R
   const words = wordsOfRow(cells, context)
   const found = points.flatMap(({ point, branch }) => point ? [{ point, branch }] : [])
   const pointFindings = points.flatMap(({ findings }) => findings)
-  const findings = [...samples.findings, ...concentration.findings, ...named.findings, ...Object.values(others).flatMap(other => other.findings), ...words.findings]
+  const findings = [...samples.findings, ...concentration.findings, ...aboutSalt(named, concentration), ...Object.values(others).flatMap(other => other.findings), ...words.findings]
   if (found.length === 0) return withoutPoint([...findings, ...pointFindings], pointFindings, context)
   const place = placeOf(concentration, named, found, context)
   const readings = place.value === null
@@ -48,6 +48,12 @@ export function readMeasured(cells: readonly ReadCell[], context: RowContext): R
         rate: others.rate.value, ph: others.ph.value, date: others.date.value, ...words.value,
       }))
   return { findings: [...findings, ...pointFindings, ...place.findings], readings: onceEach(readings) }
+}
+
+/** Where there is no salt, its name does not matter: "control" at concentration 0 is a blank. */
+function aboutSalt(named: Found<NamedSalt>, concentration: Found<Concentration>): Finding[] {
+  const isBlank = concentration.value?.x.value === 0
+  return named.findings.filter(({ tone, suggestion }) => !isBlank || tone === 'taken' || suggestion !== undefined)
 }
 
 /** A row that gives no cloud point is kept, unless something in it could not be read. */

@@ -31,6 +31,18 @@ describe('a question', () => {
     expect(readingsOf(understood).map(({ x }) => x)).toEqual([0.05, 0.1])
   })
 
+  it.each(['salt\tconc (g/L)\tT (°C)\nNaCl\t0.5\t30.4\n', 'salt\tconc\tT\n\twt%\t°C\nNaCl\t0.5\t30.4\n', 'salt\tc / µM\tT (°C)\nNaCl\t0.5\t30.4\n'])('is never assumed to be mol/L where another unit is stated: %j', (text) => {
+    expect(understandText(text).questions).toEqual([expect.objectContaining({ code: 'concentration-unit', isBlocking: true, message: expect.stringContaining('cannot be converted') })])
+  })
+
+  it('about an expanded uncertainty has no answer of ours', () => {
+    expect(questionsOf(understandText('salt\tc (M)\tT (°C)\tU (k=2)\nNaCl\t0.1\t30.4\t0.2\n'))).toEqual(['uncertainty-meaning 3 to answer'])
+  })
+
+  it('about “Tcp ± sd” is assumed from the words', () => {
+    expect(questionsOf(understandText('salt\tc (M)\tTcp ± SD (°C)\nNaCl\t0.1\t30.4 ± 0.2\n'))).toEqual(['uncertainty-meaning 2 sd-of-replicates assumed'])
+  })
+
   it('about kelvin under °C is answered either way', () => {
     const of = (value: string) => readingsOf(understandFile('kelvin-under-celsius.csv', answers(['temperature-unit', '', value]))).map(({ y }) => y)
     expect(of('K')).toEqual([31.86, 31.45, 30.95])

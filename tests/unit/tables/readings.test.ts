@@ -77,6 +77,35 @@ describe('readings', () => {
   })
 })
 
+describe('columns that say nearly the same', () => {
+  const meanings = (text: string) => understandText(text).columns.map(({ meaning }) => meaning)
+
+  it('are not averaged: one temperature in two units', () => {
+    const understood = understandText('salt\tc (M)\tT (°C)\tT (K)\nNaCl\t0.1\t30.40\t303.55\n')
+    expect(readingsOf(understood)).toEqual([expect.objectContaining({ y: 30.4, n: null })])
+    expect(understood.remarks.join()).toContain('“T (K)” stays with the file')
+  })
+
+  it('keep amounts apart from names, ionic strength from concentration, percent from kelvin', () => {
+    expect(meanings('Salt added (g)\tSalt\tionic strength (M)\tc (M)\tT (°C)\tu (%)\n0.58\tNaCl\t0.1\t0.1\t30.4\t1\n')).toEqual(['kept', 'salt', 'kept', 'concentration', 'cloud-point', 'kept'])
+  })
+
+  it('find the cloud point of a polymer, not its amount', () => {
+    expect(meanings('polymer (mg/mL)\tsalt\tc (M)\tcloud point of 1 mg/mL PNIPAM (°C)\n1\tNaCl\t0.1\t30.4\n')).toEqual(['kept', 'salt', 'concentration', 'cloud-point'])
+  })
+
+  it('are guessed from their numbers where there is no header, in either order', () => {
+    expect(meanings('31.2 0.1\n31.4 0.2\n31.5 0.3\n')).toEqual(['cloud-point', 'concentration'])
+    expect(meanings('0.1 31.2 0.05\n0.2 31.4 0.05\n')).toEqual(['concentration', 'cloud-point', 'uncertainty'])
+  })
+})
+
+describe('a row at concentration 0', () => {
+  it('is a blank, whatever its solution is called', () => {
+    expect(curve(readingsOf(understandText('salt\tc (M)\tT (°C)\ncontrol\t0\t31\nblank\t-\t31.1\nNaCl\t0\t31.2\n')))).toEqual([[null, 0, 31], [null, 0, 31.1], [null, 0, 31.2]])
+  })
+})
+
 describe('words behind the last heading', () => {
   it('are a note', () => {
     const understood = understandText('salt,c (M),T (°C)\nNaCl,0.1,30.4,slow ramp\nNaCl,0.2,29.9\n')
