@@ -21,7 +21,7 @@ export type QuantityReading = Quantity | { kind: 'empty' | 'not-determined' | 'f
 const notDetermined = new Set([
   'n.d.', 'nd', 'n.d', 'n/d', 'n/a', 'n.a.', 'na', 'nan', '-', '--', '---', '–', '—', '/', '?', 'null', 'none', 'not determined', 'not measured', 'n.m.', 'nm',
   'nicht bestimmt', 'nicht gemessen', 'n.b.', 'n. b.', 'n. d.', 'k.a.', 'k. a.', 'ikke malt', 'ikke bestemt', 'i.m.', 'i.b.', 'non determine', 'non mesure',
-  'no determinado', 'no medido', 's/d', '#n/a', '#na', '#nv', 'x',
+  'no determinado', 'no medido', 'not observed', 'none observed', 'no transition', 'no clouding', 'no cloud point', 'keine trubung', 'nicht beobachtet', 'ikke observert', 'non observe', 'no observado', 'insoluble', 'unloslich', 's/d', '#n/a', '#na', '#nv', 'x',
 ])
 const limits: readonly (readonly ['below' | 'above', RegExp])[] = [
   ['below', /^(?:<=?|≤|⩽|below|under|unter|moins de|menos de)\s*/i],

@@ -24,7 +24,7 @@ const isNumber = (text: string) => readQuantity(text, 'both', false).kind === 'n
 const numbersIn = (row: GridRow | undefined) => row ? filled(row).filter(cell => cell.value !== undefined || isNumber(cell.text)).length : 0
 
 /** How much a cell looks like a heading. Salts head columns, too, but more of them stand in rows. */
-function headingWeight(text: string): number {
+export function headingWeight(text: string): number {
   const { name, unit } = headerText(text)
   const meaning = meaningOf(name)
   if ((meaning !== null && meaning !== 'kept') || (name === '' && unit !== null) || directionOf(name) !== null) return 1
@@ -39,24 +39,30 @@ function isUnitsRow(row: GridRow | undefined): boolean {
   return texts.some(text => unitOf(text) !== null) && texts.every(isUnit)
 }
 
-function scoreOf(rows: readonly GridRow[], index: number): number {
+interface Candidate { index: number, score: number, isClear: boolean }
+
+/** How much a row looks like a header; clear is one of several headings right above numbers. */
+function candidateAt(rows: readonly GridRow[], index: number): Candidate | null {
   const row = rows[index]
   const cells = row ? filled(row) : []
-  if (!row || cells.length < 2 || (cells.length === 2 && cells[0]?.text.trim().endsWith(':'))) return 0
+  if (!row || cells.length < 2 || (cells.length === 2 && cells[0]?.text.trim().endsWith(':'))) return null
   const numbers = numbersIn(row)
   const headings = cells.reduce((sum, cell) => sum + headingWeight(cell.text), 0)
   const below = rows[isUnitsRow(rows[index + 1]) ? index + 2 : index + 1]
   const isAboveNumbers = numbersIn(below) >= 2
-  const remark = cells[0]?.text.trim().startsWith('#') ? 3 : 0
-  if (headings === 0 && !(isAboveNumbers && numbers === 0)) return 0
-  return headings - 2 * numbers + (isAboveNumbers ? 1.5 : 0) - remark - (isUnitsRow(row) ? 1 : 0)
+  const isRemark = cells[0]?.text.trim().startsWith('#') ?? false
+  if (headings === 0 && !(isAboveNumbers && numbers === 0)) return null
+  const score = headings - 2 * numbers + (isAboveNumbers ? 1.5 : 0) - (isRemark ? 3 : 0) - (isUnitsRow(row) ? 1 : 0)
+  return { index, score, isClear: headings >= 1.5 && numbers === 0 && isAboveNumbers && !isRemark && !isUnitsRow(row) }
 }
 
+/** The first clear header, so that no reading above a later one is taken for a remark; else the row that looks most like one. */
 function findHeader(rows: readonly GridRow[]): number {
-  let best = { index: -1, score: 1 }
+  let best: Candidate = { index: -1, score: 1, isClear: false }
   for (let index = 0; index < Math.min(rows.length, deepestHead); index++) {
-    const score = scoreOf(rows, index)
-    if (score > best.score) best = { index, score }
+    const candidate = candidateAt(rows, index)
+    if (candidate?.isClear) return index
+    if (candidate && candidate.score > best.score) best = candidate
   }
   return best.index
 }

@@ -4,7 +4,7 @@ type Direction = NonNullable<TableColumn['direction']>
 
 /** Headings by what they mean, in English, German, Norwegian, French and Spanish, folded (small letters, no accents). The first that fits holds. */
 const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
-  ['kept', /^(?!.*(?:cloud|trub|lcst|temp|\bt ?cp)).*(?:polymer|pnipam)|^ionic|ionenst|ionestyrke|force ionique|fuerza ionica|\brel\b|relativ|\brsd\b|\bcv\b|^(?:u|sd?|err|error|unc|fehler|uncertainty|unsicherheit)\b.*%|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
+  ['kept', /^(?!.*(?:cloud|trub|lcst|temp|\bt ?cp)).*(?:polymer|pnipam)|^ionic|ionenst|ionestyrke|force ionique|fuerza ionica|\brel\b|relativ|\brsd\b|\bcv\b|^(?:u|sd?|err|error|unc|fehler|uncertainty|unsicherheit)\b.*%|\bshift\b|verschiebung|differen|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
   // "Tcp ± sd" holds both, cell by cell.
   ['cloud-point', /^t.*\w ?(?:±|\+\/?-) ?\w|^cloud.*(?:±|\+\/?-) ?\w/],
   ['set-aside', /^set aside|^excluded?\b|ausgeschlossen|^exclu|utelatt|^omit|verworfen/],

@@ -75,7 +75,7 @@ export function readRow(row: GridRow, context: RowContext, words: RowWords = noW
 function readCells(cells: ReadCell[], context: RowContext, words: RowWords): RowReading {
   const { plan, head } = context
   if (words.row.isLeftOut) return { findings: [keptFinding('left-out', 'Left out', 'Kept with the file, not a reading.')], readings: [] }
-  const kept = keptRow(cells, head, plan) ?? wordsOnly(cells, context)
+  const kept = keptRow(cells, head, plan, words.row.isAgreed) ?? wordsOnly(cells, context)
   if (kept) return { findings: [kept], readings: [] }
   const read = readMeasured(cells, context)
   return setAsideBy(words, { findings: [...otherMarks(cells, plan, read.findings), ...read.findings, ...raggedFinding(cells, context)], readings: read.readings })

@@ -68,6 +68,15 @@ describe('a decision', () => {
     expect(counts).toEqual({ total: 16, ready: 14, toDecide: 0, unreadable: 0, kept: 2 })
   })
 
+  it('is asked for where another header stands among the rows, so that no row is read under the wrong salt', () => {
+    const text = 'c (M)\tNaCl\n0.1\t30.4\n\nc (M)\tNaSCN\n0.1\t31.6\n'
+    expect(rowOf(understandText(text), 4)).toMatchObject({ state: 'to-decide', problems: [{ code: 'repeated-header', message: 'Another header' }] })
+    expect(rowOf(understandText(text, decide({ row: 4 })), 4)).toMatchObject({ state: 'kept', problems: [{ tone: 'kept' }] })
+    expect(understandText('c (M)\tNaCl\n0.1\t30.4\n\nsalt\tc (M)\tT (°C)\tu (K)\nNaBr\t0.1\t30.8\t0.1\n')).toMatchObject({ headerRow: 1, counts: { toDecide: 1 } })
+    const nearlyTheSame = 'c (M)\tNaCl\tNaBr\tn\tnote\n0.1\t30.4\t30.8\t3\t\nc (M)\tNaSCN\tNaBr\tn\tnote\n0.1\t31.6\t30.8\t3\t\n'
+    expect(rowOf(understandText(nearlyTheSame), 3).state).toBe('to-decide')
+  })
+
   it('about a cell that is not there changes nothing', () => {
     expect(labBook({ row: 4, column: 90_000, action: 'correct', value: '1' }).rows).toEqual(labBook().rows)
   })

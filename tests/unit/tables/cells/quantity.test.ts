@@ -26,7 +26,7 @@ describe('readQuantity', () => {
     expect(valueOf(text)).toBe('text')
   })
 
-  it.each(['n.d.', 'N.D.', 'n/a', '-', '–', '—', 'nicht bestimmt', 'k.A.', 'ikke målt', 'non déterminé', 'no determinado', '#N/A'])('knows that %s says there is no value', (text) => {
+  it.each(['n.d.', 'N.D.', 'n/a', '-', '–', '—', 'nicht bestimmt', 'k.A.', 'ikke målt', 'non déterminé', 'no determinado', '#N/A', 'not observed', 'no transition', 'keine Trübung'])('knows that %s says there is no value', (text) => {
     expect(valueOf(text)).toBe('not-determined')
   })
 
