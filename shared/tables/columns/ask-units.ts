@@ -15,12 +15,13 @@ export interface Settled { columns: (Valued & { isUnitOpen: boolean })[], questi
 const mostMolar = 6
 
 function concentrationQuestion(column: Valued, choices: TableChoices): Question | null {
-  const { numbers, withUnit } = column.values
-  const amounts = numbers.filter(({ value }) => value > 0)
-  if (column.unit !== null || amounts.length === 0 || (amounts.length === 0 && withUnit > 0)) return null
+  const amounts = column.values.numbers.filter(({ value }) => value > 0)
+  if (column.unit !== null || amounts.length === 0) return null
   const isMolar = !column.isForeign && amounts.every(({ value }) => value <= mostMolar) && amounts.some(({ decimals }) => decimals > 0)
-  const asked = { code: 'concentration-unit' as const, subject: String(column.index), options: optionsOf(concentrationUnits), message: column.isForeign ? `The head of the column “${column.header}” states a unit that cannot be converted here. Convert the column in your spreadsheet, or say which unit its numbers are in.` : `Which unit are the concentrations ${placeOf(column)} in?` }
-  return ask(asked, isMolar ? 'mol/L' : null, choices)
+  const message = column.isForeign
+    ? `The head of the column “${column.header}” states a unit that cannot be converted here. Convert the column in your spreadsheet, or say which unit its numbers are in.`
+    : `Which unit are the concentrations ${placeOf(column)} in?`
+  return ask({ code: 'concentration-unit', subject: String(column.index), options: optionsOf(concentrationUnits), message }, isMolar ? 'mol/L' : null, choices)
 }
 
 const freezing = 273.15
@@ -44,25 +45,37 @@ function hasChosenUnit({ columns }: TableChoices, index: number): boolean {
   return columns?.some(choice => choice.index === index && choice.unit !== undefined && choice.unit !== null) ?? false
 }
 
+/** An uncertainty without a unit is in that of its temperatures; a difference in °C is one in K. */
+function spreadUnit({ unit }: Valued, temperature: string | null): string {
+  const own = unit ?? temperature
+  return own === '°F' ? '°F' : 'K'
+}
+
 /** Units that neither head nor person states: assumed where the numbers leave no doubt, asked for otherwise. */
 export function settleUnits(columns: readonly Valued[], choices: TableChoices): Settled {
   const points = columns.filter(({ meaning }) => meaning === 'cloud-point')
   const temperature = temperatureQuestion(points, choices)
-  const questions: Question[] = temperature ? [temperature] : []
+  const isOpen = temperature !== null && temperature.answer === null
+  const answer = temperature?.answer ?? null
+  const pointUnit = (column: Valued) => isOneOf(temperatureUnits, answer) ? answer : column.unit ?? (isOpen ? null : '°C')
+  const questions = temperature ? [temperature] : []
   const settled = columns.map((column) => {
-    if (column.meaning === 'concentration') {
-      const question = concentrationQuestion(column, choices)
-      if (question) questions.push(question)
-      const answer = question?.answer ?? null
-      return { ...column, unit: isOneOf(concentrationUnits, answer) ? answer : column.unit, isUnitOpen: question !== null && answer === null }
+    switch (column.meaning) {
+      case 'cloud-point': return { ...column, unit: pointUnit(column), isUnitOpen: isOpen }
+      case 'uncertainty': return { ...column, unit: spreadUnit(column, points[0] ? pointUnit(points[0]) : null), isUnitOpen: false }
+      case 'concentration': return settledConcentration(column, questions, choices)
+      default: return { ...column, isUnitOpen: false }
     }
-    const isTemperature = column.meaning === 'cloud-point' || column.meaning === 'uncertainty'
-    if (!isTemperature) return { ...column, isUnitOpen: false }
-    const answer = temperature?.answer ?? null
-    const unit = isOneOf(temperatureUnits, answer) ? answer : column.unit ?? (temperature ? null : column.meaning === 'cloud-point' ? '°C' : 'K')
-    return { ...column, unit: column.meaning === 'uncertainty' && unit === '°C' ? 'K' : unit, isUnitOpen: temperature !== null && answer === null }
   })
   return { columns: settled, questions }
+}
+
+/** @param questions to which the one about this column is added */
+function settledConcentration(column: Valued, questions: Question[], choices: TableChoices): Settled['columns'][number] {
+  const question = concentrationQuestion(column, choices)
+  if (question) questions.push(question)
+  const answer = question?.answer ?? null
+  return { ...column, unit: isOneOf(concentrationUnits, answer) ? answer : column.unit, isUnitOpen: question !== null && answer === null }
 }
 
 const labels = {

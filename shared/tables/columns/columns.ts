@@ -44,8 +44,8 @@ function columnOf(index: number, header: string, unitText: string): HeadedColumn
   const meaning = meaningFor(name, stated ?? below, salt ?? nearSalt)
   const units = [below, stated].filter(unit => unit !== null)
   // The sd of "Tcp ± sd" stands in the cloud point's own cells.
-  const spread = meaning === 'uncertainty' ? name : /(?:±|\+\/?-)\s*(.+)$/.exec(name)?.[1]
-  const word = spread === undefined ? null : uncertaintyWordOf(spread)
+  const uncertainty = meaning === 'uncertainty' ? name : /(?:±|\+\/?-)\s*(.+)$/.exec(name)?.[1]
+  const word = uncertainty === undefined ? null : uncertaintyWordOf(uncertainty)
   const isBranch = meaning === 'cloud-point' || meaning === 'uncertainty'
   return {
     index, header: tidy(header.replace(/\s+/g, ' ')), name, meaning,

@@ -44,7 +44,7 @@ export function readMeasured(cells: readonly ReadCell[], context: RowContext): R
   const readings = place.value === null
     ? []
     : found.flatMap(({ point, branch }) => readingOf(point, branch, place.value, {
-        direction: branch.direction ?? others.direction.value, limit: others.limit.value ?? point.limit,
+        direction: branch.direction ?? others.direction.value, limit: point.limit === 'exact' ? others.limit.value ?? 'exact' : point.limit,
         rate: others.rate.value, ph: others.ph.value, date: others.date.value, ...words.value,
       }))
   return { findings: [...findings, ...pointFindings, ...place.findings], readings: onceEach(readings) }

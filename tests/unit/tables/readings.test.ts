@@ -58,6 +58,17 @@ describe('readings', () => {
     expect(readingsOf(understandText(text))).toEqual([expect.objectContaining({ n: 3, direction: 'cooling', rate: 0.5, ph: 7.2, batch: 'B2', date: '2026-03-04', note: 'slow', scale: 'mol/L' })])
   })
 
+  it('take an uncertainty without a unit for one in the unit of its temperatures', () => {
+    expect(readingsOf(understandText('salt\tc (M)\tT (°F)\tu\nNaCl\t0.1\t86\t0.9\n'))[0]).toMatchObject({ y: 30, sd: 0.5 })
+    expect(readingsOf(understandText('salt\tc (M)\tT (°F)\tu (K)\nNaCl\t0.1\t86\t0.9\n'))[0]).toMatchObject({ y: 30, sd: 0.9 })
+    expect(readingsOf(understandText('salt\tc (M)\tT (K)\tu\nNaCl\t0.1\t303.15\t0.9\n'))[0]).toMatchObject({ y: 30, sd: 0.9 })
+  })
+
+  it('are limits where a column or the cell itself says so', () => {
+    const text = 'salt\tc (M)\tT (°C)\tlimit\nNaCl\t0.1\t4\tbelow\nNaCl\t0.2\t<4\texact\nNaCl\t0.3\t20\tsalt-precipitated\nNaCl\t0.4\t20.5\t\n'
+    expect(readingsOf(understandText(text)).map(({ limit }) => limit)).toEqual(['below', 'below', 'salt-precipitated', 'exact'])
+  })
+
   it('stay on the scale they were made up on', () => {
     expect(readingsOf(understandText('salt\tb (mmol/kg)\tT (°C)\nNaCl\t50\t30.4\n'))).toEqual([expect.objectContaining({ x: 0.05, scale: 'mol/kg' })])
   })
