@@ -1,5 +1,5 @@
 // A table's way: text/ cuts a file into cells, columns/ finds what the columns hold, readers/ reads a cell as its column says (with cells/, which knows no columns), rows/ makes readings of them.
-import { batchQuestions, type KnownBatch } from './rows/batch-questions'
+import { batchQuestions, withBatchesApart, type KnownBatch } from './rows/batch-questions'
 import { branchesOf } from './columns/branches'
 import { wordsByRow } from './rows/decisions'
 import { fillUncertainties } from './rows/fill-uncertainties'
@@ -60,6 +60,13 @@ function draftsOf(head: Head, plan: Plan, width: number, choices: TableChoices):
   })
 }
 
+/** Rows beside each other: the same one twice, gaps among the uncertainties. */
+function compared(drafts: readonly DraftRow[], plan: Plan): DraftRow[] {
+  const column = columnFor(plan, 'salt')?.index
+  const saltTextOf = ({ cells }: DraftRow) => column === undefined ? '' : cells[column]?.trim() ?? ''
+  return fillUncertainties(markSameRows(drafts, saltTextOf), branchesOf(plan))
+}
+
 function publicColumn({ index, header, meaning, unit, direction, salt, uncertaintyMeaning, of }: TableColumn): TableColumn {
   return { index, header, meaning, unit, direction, salt, uncertaintyMeaning, of }
 }
@@ -76,17 +83,18 @@ export function understand(grid: Grid, choices: TableChoices, context: TableCont
   const width = widthOf(grid, head)
   const { plan, questions } = planTable(grid, head, width, context.fileName, choices)
   const drafts = draftsOf(head, plan, width, choices)
-  const saltColumn = columnFor(plan, 'salt')?.index
-  const compared = plan.isOwnExport ? drafts : fillUncertainties(markSameRows(drafts, draft => saltColumn === undefined ? '' : draft.cells[saltColumn]?.trim() ?? ''), branchesOf(plan))
-  const below = groupProblems(compared).map(understoodRow)
+  const batches = batchQuestions(drafts.flatMap(({ readings }) => readings), context.batches, plan.isOwnExport, choices)
+  const apart = drafts.map(draft => ({ ...draft, readings: withBatchesApart(draft.readings, batches) }))
+  const below = groupProblems(plan.isOwnExport ? apart : compared(apart, plan)).map(understoodRow)
   const rows = [...preambleRows(head), ...below]
+  const branches = branchesOf(plan)
   return {
     format: grid.format, encoding: grid.encoding, sheets: grid.sheets, sheet: grid.sheet, delimiter: grid.delimiter ?? null,
     decimal: plan.isMixed ? 'both' : plan.decimal === ',' ? ',' : '.',
-    form: branchesOf(plan).some(({ columns, salt }) => columns.length > 1 || salt !== null) || branchesOf(plan).length > 1 ? 'wide' : 'long',
+    form: branches.length > 1 || branches.some(({ columns, salt }) => columns.length > 1 || salt !== null) ? 'wide' : 'long',
     headerRow: head.header?.number ?? null, unitsRow: head.units?.number ?? null,
     columns: plan.columns.map(publicColumn), rows, counts: countsOf(rows),
-    questions: [...questions, ...batchQuestions(compared.flatMap(({ readings }) => readings), context.batches, choices)],
+    questions: [...questions, ...batches],
     remarks: remarksOf(head, plan, rows.flatMap(({ readings }) => readings), context.clouds),
   }
 }

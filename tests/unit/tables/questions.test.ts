@@ -93,6 +93,20 @@ describe('a question', () => {
   })
 })
 
+describe('one name for batches of several days', () => {
+  const text = 'salt\tc (M)\tT (°C)\tbatch\tdate\nNaCl\t0.1\t30.4\tA\t2026-03-04\nNaCl\t0.2\t29.9\tA\t2026-03-05\n'
+  const labels = (choices = {}) => readingsOf(understandText(text, choices)).map(({ batch }) => batch)
+
+  it('is taken for one batch, and said', () => {
+    expect(questionsOf(understandText(text))).toEqual(['batch-exists A join assumed'])
+    expect(labels()).toEqual(['A', 'A'])
+  })
+
+  it('becomes a batch for each day where a person says so', () => {
+    expect(labels(answers(['batch-exists', 'A', 'apart']))).toEqual(['A, 2026-03-04', 'A, 2026-03-05'])
+  })
+})
+
 describe('what a person says about columns', () => {
   const text = 'salt\tc (M)\tT10 (°C)\tT50 (°C)\tthing\nNaCl\t0.1\t30.4\t30.9\t3\nNaCl\t0.2\t29.9\t30.3\t3\n'
 
