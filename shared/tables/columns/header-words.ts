@@ -2,25 +2,57 @@ import type { ColumnMeaning, TableColumn } from '../types'
 
 type Direction = NonNullable<TableColumn['direction']>
 
-/** Headings by what they mean, in English, German, Norwegian, French and Spanish, folded (small letters, no accents). The first that fits holds. */
-const meanings: readonly (readonly [ColumnMeaning, RegExp])[] = [
-  ['kept', /^(?!.*(?:cloud|trub|lcst|temp|\bt ?cp)).*(?:polymer|pnipam)|^ionic|ionenst|ionestyrke|force ionique|fuerza ionica|\brel\b|relativ|\brsd\b|\bcv\b|^(?:u|sd?|err|error|unc|fehler|uncertainty|unsicherheit)\b.*%|\bshift\b|verschiebung|differen|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum|^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wellenlange|wavelength|^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/],
+type Heading = readonly [ColumnMeaning, RegExp]
+
+const means = (meaning: ColumnMeaning, ...words: readonly RegExp[]): Heading => [meaning, new RegExp(words.map(({ source }) => source).join('|'))]
+
+/**
+ * Headings by what they mean, folded (small letters, no accents); the first that fits holds.
+ * Within a meaning: signs and symbols, then English, German, Norwegian, French and Spanish.
+ */
+const meanings: readonly Heading[] = [
+  means('kept',
+    /^(?!.*(?:cloud|trub|lcst|temp|\bt ?cp)).*(?:polymer|pnipam)/,
+    /^ionic|ionenst|ionestyrke|force ionique|fuerza ionica/,
+    /\brel\b|relativ|\brsd\b|\bcv\b|^(?:u|sd?|err|error|unc|fehler|uncertainty|unsicherheit)\b.*%/,
+    /\bshift\b|verschiebung|differen|\bstock\b|stamm|mass(?:e|a)?\b|weight|gewicht|volum/,
+    /^time\b|^zeit|^tid\b|^temps\b|^tiempo|^hora\b|absorb|transmi|wavelength|wellenlange/,
+    /^(?:no|nr|#|id|index|entry|row|zeile|file|datei|sample id|operator|bearbeiter)$/),
   // "Tcp ± sd" holds both, cell by cell.
-  ['cloud-point', /^t.*\w ?(?:±|\+\/?-) ?\w|^cloud.*(?:±|\+\/?-) ?\w/],
-  ['set-aside', /^set aside|^excluded?\b|ausgeschlossen|^exclu|utelatt|^omit|verworfen/],
-  ['limit', /^limit|^qualifier|^censor|^grenze$|^grense$|^limite$/],
-  ['pH', /^ph\b/],
-  ['rate', /\brate\b|heizrate|kuhlrate|\bvitesse\b|velocidad|hastighet|\bramp(?:e)?\b/],
-  ['samples', /^n$|^n [a-z]*$|\bsamples\b|replicates|^(?:number|no|nr|num) of|^anzahl|^antall|^nombre d(?:e |')(?:mes|essai|rep|ech)|^numero de (?:m|r|e)|^count$|^proben$|^prover$|messungen|^reps$/],
-  ['replicate', /^rep$|^rep ?(?:no|nr|#)|^replicate|^replikat|^wiederholung|^parallel+|^essai|^repetition|^repeticion|^replica|^aliquot|^triplicate|^vial$/],
-  ['uncertainty', /±|\+\/?-|^(?:d|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|fehler|erreur|feil|incert|unc|dev|dt|δt)$|^(?:u|s|σ|d|δ|se|sd|sem)\s?\(|(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])|uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|ecart|incertitude|erreur|desviacion|incertidumbre|usikkerhet|avvik|error estandar/],
-  ['concentration', /conc|konz|konsentrasjon|^kons\b|molarit|molalit|^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$/],
-  ['batch', /batch|^charge$|^charge\b|^lot\b|^lote$|^parti|messreihe|^serie$|^series$|^run\b|^lauf$|^set$|^tanda$/],
-  ['date', /^date|datum|^dato|fecha|^measured(?: on| at)?$|^gemessen(?: am)?$|^malt(?: den)?$|mesure le|medido|^day$|^tag$|^dag$|^jour$|^dia$|^when$/],
-  ['direction', /^direction|richtung|^retning|^sens\b|direccion|^branch|^scan$|^mode$|up ?\/ ?down|heating ?\/ ?cooling|^zweig$/],
-  ['note', /^notes?\b|remar[kq]|comment|kommentar|bemerkung|anmerkung|^notiz|merknad|observ|^notas?\b|^info|^hinweis/],
-  ['cloud-point', /cloud(?!y)|trubung|turbidez|turbidity|turbidit|enturbiamiento|trouble|punto de nube|uklar|skypunkt|blakning|\blcst\b|\bucst\b|temp|^t$|^t ?\d{1,2}$|^t[ (]|^t-|^tcp|^tcloud|^cp$|^cp |^tc$|^tph|^tm$|^tt$|^y$|^θ$|^ϑ$|transition|ubergang|demix/],
-  ['salt', /salt|salz|^sels?\b|^sal$|^sales$|^anion|^ion$|^compound|verbindung|^stoff|electrolyte|elektrolyt|^additiv|^zusatz|^formula|^formel|^formule/],
+  means('cloud-point', /^t.*\w ?(?:±|\+\/?-) ?\w|^cloud.*(?:±|\+\/?-) ?\w/),
+  means('set-aside', /^set aside|^excluded?\b|^omit|ausgeschlossen|verworfen|utelatt|^exclu/),
+  means('limit', /^limit|^qualifier|^censor|^grenze$|^grense$|^limite$/),
+  means('pH', /^ph\b/),
+  means('rate', /\brate\b|\bramp(?:e)?\b|heizrate|kuhlrate|hastighet|\bvitesse\b|velocidad/),
+  means('samples',
+    /^n$|^n [a-z]*$|^count$|^reps$|\bsamples\b|replicates|^(?:number|no|nr|num) of/,
+    /^anzahl|^proben$|messungen|^antall|^prover$|^nombre d(?:e |')(?:mes|essai|rep|ech)|^numero de (?:m|r|e)/),
+  means('replicate',
+    /^rep$|^rep ?(?:no|nr|#)|^replicate|^parallel+|^aliquot|^triplicate|^vial$/,
+    /^replikat|^wiederholung|^essai|^repetition|^repeticion|^replica/),
+  means('uncertainty',
+    /±|\+\/?-/,
+    /^(?:d|dt|δt|delta |δ|σ|u|s|su|u c|uc|se|sem|sd|std|stdev|stddev|stabw|stdabw|sigma|esd|err|error|incert|unc|dev)$/,
+    /^(?:u|s|σ|d|δ|se|sd|sem)\s?\(/,
+    /(?:^|[ (])(?:sd|se|sem|std|stdev|std dev|stdabw|stabw|stderr|std err|err|error|unc|sigma)(?:$|[ )])/,
+    /uncertaint|deviation|standard error|abweichung|unsicherheit|messfehler|^fehler$|usikkerhet|avvik|^feil$/,
+    /ecart|incertitude|erreur|desviacion|incertidumbre|error estandar/),
+  means('concentration',
+    /^c$|^c ?[([]|^c [a-z0-9]+$|^\[.*\]$|^m$|^b$|^x$/,
+    /conc|molarit|molalit|konz|konsentrasjon|^kons\b/),
+  means('batch', /batch|^lot\b|^run\b|^set$|^series$|^charge\b|messreihe|^lauf$|^parti|^serie$|^lote$|^tanda$/),
+  means('date',
+    /^date|^measured(?: on| at)?$|^day$|^when$|datum|^gemessen(?: am)?$|^tag$/,
+    /^dato|^malt(?: den)?$|^dag$|mesure le|^jour$|fecha|medido|^dia$/),
+  means('direction', /^direction|^branch|^scan$|^mode$|up ?\/ ?down|heating ?\/ ?cooling|richtung|^zweig$|^retning|^sens\b|direccion/),
+  means('note', /^notes?\b|^info|remar[kq]|comment|observ|kommentar|bemerkung|anmerkung|^notiz|^hinweis|merknad|^notas?\b/),
+  means('cloud-point',
+    /^t$|^t ?\d{1,2}$|^t[ (]|^t-|^tcp|^tcloud|^cp$|^cp |^tc$|^tph|^tm$|^tt$|^y$|^θ$|^ϑ$|\blcst\b|\bucst\b/,
+    /cloud(?!y)|turbidity|temp|transition|demix|trubung|ubergang|uklar|skypunkt|blakning/,
+    /trouble|turbidit|turbidez|enturbiamiento|punto de nube/),
+  means('salt',
+    /salt|^anion|^ion$|^compound|electrolyte|^additiv|^formula/,
+    /salz|verbindung|elektrolyt|^zusatz|^stoff|^formel|^sels?\b|^formule|^sal$|^sales$/),
 ]
 
 /** @param name folded, without its unit */
@@ -54,7 +86,13 @@ export function uncertaintyWordOf(name: string): UncertaintyWord | null {
 }
 
 /** Headings and cells that name a mean of the rest, in the same five languages. */
-const summary = /^(?:the )?(?:mean|average|avg|median|mittel(?:wert)?|durchschnitt|moyenne|moy|gjennomsnitt|snitt|middel(?:verdi)?|media|promedio|mediana|sum|summe|somme|suma|total|totalt|gesamt|min(?:imum)?|max(?:imum)?|sd|std|stdev|stabw|stdabw|standard deviation|standardabweichung|standardavvik|ecart[- ]type|desviacion estandar|rsd|cv|slope|steigung|pente|intercept|range)\b\.?(?:\s*(?:±|\+\/-).*| of .*| t.*)?\s*:?$/
+const summaryWords = [
+  'mean', 'average', 'avg', 'median', 'mittel(?:wert)?', 'durchschnitt', 'gjennomsnitt', 'snitt', 'middel(?:verdi)?', 'moyenne', 'moy', 'media', 'promedio', 'mediana',
+  'sum', 'total', 'summe', 'gesamt', 'totalt', 'somme', 'suma', 'min(?:imum)?', 'max(?:imum)?', 'range',
+  'sd', 'std', 'stdev', 'stabw', 'stdabw', 'standard deviation', 'standardabweichung', 'standardavvik', 'ecart[- ]type', 'desviacion estandar', 'rsd', 'cv',
+  'slope', 'intercept', 'steigung', 'pente',
+]
+const summary = new RegExp(`^(?:the )?(?:${summaryWords.join('|')})\\b\\.?(?:\\s*(?:±|\\+/-).*| of .*| t.*)?\\s*:?$`)
 
 export function isSummaryWord(folded: string): boolean {
   return summary.test(folded)

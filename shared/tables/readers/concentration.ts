@@ -1,7 +1,7 @@
-import { movePoint, typed, type Decimal } from '../cells/decimal'
-import { dateFinding, fault, nothing, quantityOf, quoted, taken, takenFindings, unreadableNumber, type Found, type ReadCell } from './finding'
+import { decimalOf, movePoint, typed, type Decimal } from '../cells/decimal'
+import { dateFinding, fault, nothing, quantityOf, taken, takenFindings, unreadableNumber, type Finding, type Found, type ReadCell } from './finding'
 import type { Plan, PlannedColumn } from '../columns/plan'
-import type { Quantity } from '../cells/quantity'
+import type { Quantity, QuantityReading } from '../cells/quantity'
 import { saltOf } from '../cells/salt-cache'
 
 export type Scale = 'mol/L' | 'mol/kg'
@@ -13,19 +13,41 @@ const mostConcentrated = 30
 const scaleOf = (unit: string): Scale => unit.endsWith('kg') ? 'mol/kg' : 'mol/L'
 const powerOf = (unit: string) => unit.startsWith('m') && !unit.startsWith('mol') ? -3 : 0
 
+const refused = (finding: Finding): Found<Concentration> => ({ value: null, findings: [finding] })
+
 function inScale(cell: ReadCell, column: PlannedColumn, reading: Quantity): Found<Concentration> {
-  const own = column.unit ?? 'mol/L'
+  const own = column.unit ?? (reading.unit?.of === 'concentration' ? reading.unit.name : 'mol/L')
   const stated = reading.unit?.name ?? own
   const scale = scaleOf(own)
   const x = movePoint(reading.number, powerOf(stated))
   if (reading.unit && (reading.unit.of !== 'concentration' || scaleOf(stated) !== scale)) {
-    return { value: null, findings: [fault(column.index, 'unit-in-cell', `${cell.text.trim()} in a column of ${own}`, `It is not changed into ${scale} without being asked. Type the value in ${own}.`)] }
+    return refused(fault(column.index, 'unit-in-cell', `${cell.text.trim()} in a column of ${own}`, `It is not changed into ${scale} without being asked. Type the value in ${own}.`))
   }
-  if (reading.unit && stated !== own && column.unit !== null) {
-    const value = typed(movePoint(x, -powerOf(own)))
-    return { value: { x, scale }, findings: [taken(column.index, 'unit-in-cell', `Reads as ${value} ${own}`, `The column is in ${own}; this cell says ${reading.unit.name}. Taken as ${value}.`, value)] }
+  if (stated === own) return { value: { x, scale }, findings: [] }
+  const value = typed(movePoint(x, -powerOf(own)))
+  return { value: { x, scale }, findings: [taken(column.index, 'unit-in-cell', `Reads as ${value} ${own}`, `The column is in ${own}; this cell says ${stated}. Taken as ${value}.`, value)] }
+}
+
+/** A concentration that no solution has, with what was probably meant. */
+function impossible(cell: ReadCell, column: PlannedColumn, { number, unit }: Quantity, { x, scale }: Concentration): Finding | null {
+  const withUnit = unit ? ` ${unit.name}` : ''
+  if (x.value < 0) {
+    const positive = `${typed(number).replace('-', '')}${withUnit}`
+    return fault(column.index, 'negative-concentration', `A negative concentration: ${cell.text.trim()}`, `If the sign is a slip, it is ${positive}. Type the concentration, or leave the row out.`, positive)
   }
-  return { value: { x, scale }, findings: [] }
+  if (x.value <= mostConcentrated || column.isUnitOpen) return null
+  const message = `${typed(x)} ${scale} is more than any salt dissolves to`
+  // A number with a unit of its own means what it says; one without may be in thousandths.
+  if (unit || powerOf(column.unit ?? 'mol/L') !== 0) return fault(column.index, 'outside-range', message, 'Type the concentration, or leave the row out.')
+  const smaller = `${typed(number)} ${scale === 'mol/L' ? 'mM' : 'mmol/kg'}`
+  return fault(column.index, 'outside-range', message, `Is it ${smaller}? Type the value with its unit.`, smaller)
+}
+
+function withoutNumber(cell: ReadCell, column: PlannedColumn, kind: Exclude<QuantityReading['kind'], 'number'>): Found<Concentration> {
+  if (kind === 'date') return refused(dateFinding(cell, column))
+  if (kind === 'not-determined') return refused(fault(column.index, kind, `No concentration: ${cell.text.trim()}`, 'Type the concentration, or leave the row out.'))
+  const isBlank = cell.text.trim() !== '' && saltOf(cell.text).kind === 'blank'
+  return isBlank ? { value: { x: decimalOf('0'), scale: scaleOf(column.unit ?? 'mol/L') }, findings: [] } : refused(unreadableNumber(cell, column.index, kind, 'concentration'))
 }
 
 /** A concentration in mol/L or mol/kg, whatever the cell and its column are written in. An empty cell gives nothing and no finding. */
@@ -33,24 +55,15 @@ export function readConcentration(cell: ReadCell, column: PlannedColumn, plan: P
   const { index } = column
   const reading = quantityOf(cell, column, plan)
   if (reading.kind === 'empty' && cell.formula === undefined) return nothing
-  if (reading.kind === 'date') return { value: null, findings: [dateFinding(cell, column)] }
-  if (reading.kind === 'not-determined') return { value: null, findings: [fault(index, 'not-determined', `No concentration: ${cell.text.trim()}`, 'Type the concentration, or leave the row out.')] }
-  if (reading.kind !== 'number') {
-    if (saltOf(cell.text).kind === 'blank' && cell.text.trim() !== '') return { value: { x: { value: 0, text: '0', decimals: 0 }, scale: scaleOf(column.unit ?? 'mol/L') }, findings: [] }
-    return { value: null, findings: [unreadableNumber(cell, index, reading.kind, 'concentration')] }
-  }
+  if (reading.kind !== 'number') return withoutNumber(cell, column, reading.kind)
   if (reading.limit !== 'exact') {
-    return { value: null, findings: [fault(index, reading.limit === 'below' ? 'below-limit' : 'above-limit', `A limit, not a concentration: ${cell.text.trim()}`, 'A reading needs the concentration itself. Type it, or leave the row out.')] }
+    const code = reading.limit === 'below' ? 'below-limit' : 'above-limit'
+    return refused(fault(index, code, `A limit, not a concentration: ${cell.text.trim()}`, 'A reading needs the concentration itself. Type it, or leave the row out.'))
   }
   const { value, findings } = inScale(cell, column, reading)
   if (!value) return { value, findings }
-  if (value.x.value < 0) {
-    const positive = typed(reading.number).replace('-', '')
-    return { value: null, findings: [fault(index, 'negative-concentration', `A negative concentration: ${cell.text.trim()}`, `If the sign is a slip, it is ${positive}. Type the concentration, or leave the row out.`, positive)] }
-  }
-  if (value.x.value > mostConcentrated && !column.isUnitOpen) {
-    return { value: null, findings: [fault(index, 'outside-range', `${value.x.text} ${value.scale} is more than any salt dissolves to`, `Is ${quoted(cell.text)} in another unit? Type the value with its unit, such as ${reading.number.text} mM.`, `${reading.number.text} ${value.scale === 'mol/L' ? 'mM' : 'mmol/kg'}`)] }
-  }
-  const stated = reading.uncertainty ? [taken(index, 'stated-uncertainty', `Reads as ${reading.number.text}`, 'Concentrations are taken as exact; their uncertainty stays with the file.')] : []
+  const slip = impossible(cell, column, reading, value)
+  if (slip) return refused(slip)
+  const stated = reading.uncertainty ? [taken(index, 'stated-uncertainty', `Reads as ${typed(reading.number)}`, 'Concentrations are taken as exact; their uncertainty stays with the file.')] : []
   return { value, findings: [...findings, ...stated, ...takenFindings(cell, column, reading, plan)] }
 }

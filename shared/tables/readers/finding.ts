@@ -1,5 +1,5 @@
 import { readQuantity, type QuantityReading } from '../cells/quantity'
-import { decimalOfDouble } from '../cells/decimal'
+import { decimalOfDouble, typed } from '../cells/decimal'
 import { numbersBehindDate } from '../cells/dates'
 import type { Plan, PlannedColumn } from '../columns/plan'
 import type { GridCell, RowProblem } from '../types'
@@ -57,7 +57,7 @@ export function takenFindings(cell: ReadCell, column: PlannedColumn, reading: Qu
   if (reading.kind !== 'number') return []
   const findings: Finding[] = []
   const { index } = column
-  const reads = `Reads as ${reading.number.text}`
+  const reads = `Reads as ${typed(reading.number)}`
   if (plan.format === 'xlsx' && cell.value === undefined && !cell.isCorrected) findings.push(taken(index, 'text-number', 'A number stored as text', `${reads}.`))
   if (reading.isGrouped) findings.push(taken(index, 'thousands', reads, `The thousands of ${quoted(cell.text)} are set apart.`))
   if (reading.isApproximate) findings.push(taken(index, 'approximate', `An approximate value: ${cell.text.trim()}`, `${reads}; the mark stays with the file.`))

@@ -47,11 +47,12 @@ function outsideRange(cell: ReadCell, column: PlannedColumn, reading: Quantity):
     return undecided(column.index, 'outside-range', message, slip ? `It may be in °C. Agree, or type the value in ${unit}.` : `Type the value in ${unit}, or set the reading aside.`, slip)
   }
   const kelvin = celsiusOfKelvin(number)
+  const asTyped = (celsius: Decimal) => column.unit === null || column.unit === '°C' ? typed(celsius) : `${typed(celsius)} °C`
   const moved = withPointMoved(number)
-  const middle = column.middle ?? kelvin.value
+  const middle = column.middle === null ? kelvin.value : celsiusOf(decimalOfDouble(column.middle), column.unit).value
   const isKelvin = isInRange(kelvin.value) && (!moved || Math.abs(kelvin.value - middle) <= Math.abs(moved.value - middle))
-  if (isKelvin) return undecided(column.index, 'kelvin', `${typed(number)} °C may be kelvin`, `${typed(number)} K is ${typed(kelvin)} °C. Agree, type the value, or set the reading aside.`, typed(kelvin))
-  if (moved) return fault(column.index, 'outside-range', message, `A missing decimal point would give ${typed(moved)}. Type the value, or set the reading aside.`, typed(moved))
+  if (isKelvin) return undecided(column.index, 'kelvin', `${typed(number)} °C may be kelvin`, `${typed(number)} K is ${typed(kelvin)} °C. Agree, type the value, or set the reading aside.`, asTyped(kelvin))
+  if (moved) return fault(column.index, 'outside-range', message, `A missing decimal point would give ${typed(moved)}. Type the value, or set the reading aside.`, asTyped(moved))
   return fault(column.index, 'outside-range', message, 'Type the value, or set the reading aside.')
 }
 

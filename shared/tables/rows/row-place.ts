@@ -19,7 +19,7 @@ export function placeOf(concentration: Found<Concentration>, named: Found<NamedS
   if (x === 0 || (isNamedBlank && x === null && concentration.findings.length === 0)) return { value: { x: 0, scale, salt: null }, findings: [] }
   if (isNamedBlank && x !== null) {
     const column = columnFor(plan, 'concentration')?.index ?? null
-    return { value: null, findings: [undecided(column, 'no-salt', `A blank with ${concentration.value?.x.text} ${scale}`, 'A blank has no salt. Agree to take its concentration as 0, or type the salt.', '0')] }
+    return { value: null, findings: [undecided(column, 'no-salt', `A blank with ${x} ${scale}`, 'A blank has no salt. Agree to take its concentration as 0, or type the salt.', '0')] }
   }
   const salt = saltFor(named, found, context)
   const missing = x === null && concentration.findings.length === 0 ? [noConcentration(plan)] : []

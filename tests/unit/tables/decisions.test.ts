@@ -15,6 +15,16 @@ describe('a decision', () => {
     expect(row.readings[0]).toMatchObject({ salt: 'NaSCN', x: 0.35 })
   })
 
+  it.each([['-50 mM', 0.05], ['-0.05', 0.05], ['50', 0.05]])('that agrees never changes the unit: %s', (text, x) => {
+    const understood = understandText(`salt\tc (M)\tT (°C)\nNaCl\t${text}\t30.4\nNaCl\t0.2\t29.9\n`, decide({ row: 2, column: 1 }))
+    expect(rowOf(understood, 2).readings).toEqual([expect.objectContaining({ x })])
+  })
+
+  it('that agrees gives °C in a column of kelvin', () => {
+    const understood = understandText('salt\tc (M)\tT (K)\nNaCl\t0.1\t318.6 °C\nNaCl\t0.2\t303.15\nNaCl\t0.3\t31.2\n', decide({ row: 2, column: 2 }, { row: 4, column: 2 }))
+    expect(readingsOf(understood).map(({ y }) => y)).toEqual([31.86, 30, 31.2])
+  })
+
   it('that agrees to what was taken ends the matter', () => {
     expect(rowOf(labBook({ row: 4, column: 0 }), 4)).toMatchObject({ state: 'ready', problems: [], readings: [{ x: 0.05 }, { x: 0.05 }] })
     expect(rowOf(labBook({ row: 14, column: 4 }), 14)).toMatchObject({ problems: [], readings: [{ sd: 0.03, sdGiven: null }, { sd: 0.03 }] })

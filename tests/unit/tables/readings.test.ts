@@ -58,6 +58,10 @@ describe('readings', () => {
     expect(readingsOf(understandText(text))).toEqual([expect.objectContaining({ n: 3, direction: 'cooling', rate: 0.5, ph: 7.2, batch: 'B2', date: '2026-03-04', note: 'slow', scale: 'mol/L' })])
   })
 
+  it('follow the unit of their cells where the column states none', () => {
+    expect(readingsOf(understandText('salt\tc\tT (°C)\nNaCl\t50 mmol/kg\t30.4\nNaCl\t0.1 mol/kg\t29.9\n')).map(({ x, scale }) => [x, scale])).toEqual([[0.05, 'mol/kg'], [0.1, 'mol/kg']])
+  })
+
   it('take an uncertainty without a unit for one in the unit of its temperatures', () => {
     expect(readingsOf(understandText('salt\tc (M)\tT (°F)\tu\nNaCl\t0.1\t86\t0.9\n'))[0]).toMatchObject({ y: 30, sd: 0.5 })
     expect(readingsOf(understandText('salt\tc (M)\tT (°F)\tu (K)\nNaCl\t0.1\t86\t0.9\n'))[0]).toMatchObject({ y: 30, sd: 0.9 })
