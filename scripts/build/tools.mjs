@@ -10,6 +10,7 @@ const tools = {
 /** Threads are files of their own: taken into the server's bundle they would start a second server. */
 const threads = {
   fit: 'server/workers/fit.ts',
+  table: 'server/workers/table.ts',
 }
 
 /**

@@ -3,6 +3,7 @@ import { createError } from 'h3'
 import { closeDatabase, onLostConnection } from '~~/server/database/client'
 import { sessionPerson } from '~~/server/services/sessions'
 import { closeFitPool, warmFitPool } from '~~/server/services/fit-pool'
+import { closeTablePool } from '~~/server/services/imports/table-pool'
 import { reportLostConnection } from '~~/server/utils/logger'
 
 /** Starts the threads for fits, and ends what is open when the process is asked to stop. */
@@ -11,6 +12,7 @@ export default defineNitroPlugin((app) => {
   warmFitPool()
   app.hooks.hook('close', async () => {
     await closeFitPool()
+    await closeTablePool()
     await closeDatabase()
   })
   // The page asks the session library who is signed in; a session revoked elsewhere is nobody's.

@@ -29,7 +29,9 @@ export async function describeApi(): Promise<Json> {
   }
 }
 
-function operation({ summary, access, params, query, input, answer, status, streams }: Declaration): Json {
+const fileForm = { type: 'object', required: ['file'], properties: { file: { type: 'string', format: 'binary' } } }
+
+function operation({ summary, access, params, query, input, takesFile, answer, status, streams }: Declaration): Json {
   const open = access.name === 'anyone'
   return {
     summary,
@@ -37,7 +39,7 @@ function operation({ summary, access, params, query, input, answer, status, stre
     'x-access': access.name,
     'security': open ? [] : [{ session: [] }],
     'parameters': [...parametersOf(params, 'path'), ...parametersOf(query, 'query')],
-    ...(input && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(input, 'input') } } } }),
+    ...(input && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(input, 'input') }, ...(takesFile && { 'multipart/form-data': { schema: fileForm } }) } } }),
     'responses': {
       [status ?? (answer ? 200 : 204)]: {
         description: summary,

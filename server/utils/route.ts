@@ -3,7 +3,7 @@ import type { z } from 'zod'
 import { ServiceError, type Fault } from '~~/server/services/errors'
 import type { Visitor } from '~~/server/services/sessions'
 import { nowhere, type AccessRule } from './access'
-import { ordinaryBody, readJson } from './body'
+import { hasFile, ordinaryBody, readFile, readJson, type UploadedFile } from './body'
 import { sendEvents, type StreamedEvent } from './event-stream'
 import { examine } from './faults'
 import { countSentence, sendProblem } from './problem'
@@ -15,6 +15,8 @@ interface Call<Person, Params, Query, Input> {
   params: Params
   query: Query
   input: Input
+  /** What came as a form with the field `file`, where the route takes one; `input` is undefined then. */
+  file: UploadedFile | null
   /** Aborted when the caller has gone or the server stops. */
   signal: AbortSignal
 }
@@ -32,6 +34,10 @@ export interface Declaration<Person extends Visitor | null = Visitor | null, Par
   streams?: boolean
   /** Most bytes of the body. */
   bodyLimit?: number
+  /** An empty body counts as {}. */
+  isBodyOptional?: boolean
+  /** Takes a form with the field `file` in place of the JSON of `input`. */
+  takesFile?: boolean
   /** Faults that only show beside each other, looked for when the contract has already found some: so that all come at once. */
   examineFurther?: (given: unknown) => Promise<readonly Fault[]>
   /** Called before anything is read: refuses who calls too often. */
@@ -68,8 +74,9 @@ async function carryOut<Person extends Visitor | null, Params, Query, Input, Giv
   await declaration.admitRate?.(event)
   const params = readParams(event, declaration.params)
   const person = await declaration.access.admit(event, params as Record<string, string>)
-  const { query, input } = await readInput(event, declaration)
-  const given = await declaration.handle({ event, person, params, query, input, signal: closing(event) })
+  const file = declaration.takesFile && hasFile(event) ? await readFile(event, declaration.bodyLimit ?? ordinaryBody) : null
+  const { query, input } = await readInput(event, file ? { ...declaration, input: undefined } : declaration)
+  const given = await declaration.handle({ event, person, params, query, input, file, signal: closing(event) })
   setResponseHeader(event, 'cache-control', 'no-store')
   if (declaration.streams) return sendEvents(event, given as AsyncIterable<StreamedEvent>)
   setResponseStatus(event, declaration.status ?? (declaration.answer ? 200 : 204))
@@ -86,7 +93,7 @@ function readParams<Params>(event: H3Event, contract: z.ZodType<Params> | undefi
 }
 
 async function readInput<Query, Input>(
-  event: H3Event, { query, input, bodyLimit = ordinaryBody, examineFurther }: Pick<Declaration<never, never, Query, Input>, 'query' | 'input' | 'bodyLimit' | 'examineFurther'>,
+  event: H3Event, { query, input, bodyLimit = ordinaryBody, isBodyOptional = false, examineFurther }: Pick<Declaration<never, never, Query, Input>, 'query' | 'input' | 'bodyLimit' | 'isBodyOptional' | 'examineFurther'>,
 ): Promise<{ query: Query, input: Input }> {
   const faults: Fault[] = []
   const take = <Value>(contract: z.ZodType<Value> | undefined, given: unknown, root = ''): Value => {
@@ -96,7 +103,7 @@ async function readInput<Query, Input>(
     faults.push(...examined.faults)
     return undefined as Value
   }
-  const body = input ? await readJson(event, bodyLimit) : undefined
+  const body = input ? await readJson(event, bodyLimit, isBodyOptional) : undefined
   const taken = { query: take(query, getQuery(event), 'query'), input: take(input, body) }
   if (faults.length > 0) {
     const known = new Set(faults.map(({ path }) => path))

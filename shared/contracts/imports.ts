@@ -61,9 +61,9 @@ export const questionContract = z.object({
 const decisionContract = z.strictObject({
   row: z.number().int().min(1),
   column: z.number().int().min(0).nullish().transform(column => column ?? null),
-  action: z.enum(decisionActions),
+  action: z.enum(decisionActions).optional().describe('default: correct with a value, else agree'),
   value: z.string().max(500).optional().describe('correct: the cell as it should read; set-aside: the reason'),
-})
+}).transform(({ action, ...decision }) => ({ ...decision, action: action ?? (decision.value === undefined ? 'agree' as const : 'correct' as const) }))
 
 /** How the table is to be read. Each part given replaces that part; decisions and answers are added, the newest word on a cell holds. */
 export const changeImportContract = z.strictObject({
