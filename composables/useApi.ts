@@ -1,3 +1,4 @@
+import type { Me } from '#shared/contracts/me'
 import type { Project, ProjectDetail } from '#shared/contracts/projects'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 
@@ -15,6 +16,12 @@ async function everyPage<Item>(fetchPage: (query: { limit: number, cursor?: stri
     cursor = page.nextCursor
   } while (cursor)
   return items
+}
+
+/** Who is signed in, with labs and projects. */
+export function useMe() {
+  const request = useRequestFetch()
+  return useAsyncData('me', () => request<Me>('/api/v1/me'))
 }
 
 /** The projects of whoever is signed in. */

@@ -31,7 +31,7 @@ export async function describeApi(): Promise<Json> {
 
 const fileForm = { type: 'object', required: ['file'], properties: { file: { type: 'string', format: 'binary' } } }
 
-function operation({ summary, access, params, query, input, takesFile, answer, status, streams }: Declaration): Json {
+function operation({ summary, access, params, query, input, takesFile, sendsFile, answer, status, streams }: Declaration): Json {
   const open = access.name === 'anyone'
   return {
     summary,
@@ -41,8 +41,9 @@ function operation({ summary, access, params, query, input, takesFile, answer, s
     'parameters': [...parametersOf(params, 'path'), ...parametersOf(query, 'query')],
     ...(input && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(input, 'input') }, ...(takesFile && { 'multipart/form-data': { schema: fileForm } }) } } }),
     'responses': {
-      [status ?? (answer ? 200 : 204)]: {
+      [status ?? (answer || sendsFile ? 200 : 204)]: {
         description: summary,
+        ...(sendsFile && { content: { '*/*': { schema: { type: 'string', format: 'binary' } } } }),
         ...(answer && { content: { [streams ? 'text/event-stream' : 'application/json']: { schema: schemaOf(answer, 'output') } } }),
       },
       default: { description: 'A problem', content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } },

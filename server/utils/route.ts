@@ -1,11 +1,13 @@
 import { defineEventHandler, getQuery, getRouterParams, setResponseHeader, setResponseStatus, type EventHandler, type H3Event } from 'h3'
 import type { z } from 'zod'
 import { ServiceError, type Fault } from '~~/server/services/errors'
+import type { SentFile } from '~~/server/services/export/export'
 import type { Visitor } from '~~/server/services/sessions'
 import { nowhere, type AccessRule } from './access'
 import { hasFile, ordinaryBody, readFile, readJson, type UploadedFile } from './body'
 import { sendEvents, type StreamedEvent } from './event-stream'
 import { examine } from './faults'
+import { sendFile } from './send-file'
 import { countSentence, sendProblem } from './problem'
 import { stopping } from './stopping'
 
@@ -32,6 +34,8 @@ export interface Declaration<Person extends Visitor | null = Visitor | null, Par
   answer: z.ZodType<Answer, Given> | null
   status?: 200 | 201 | 202 | 204
   streams?: boolean
+  /** Answers with a file; `handle` gives a SentFile. */
+  sendsFile?: boolean
   /** Most bytes of the body. */
   bodyLimit?: number
   /** An empty body counts as {}. */
@@ -42,7 +46,7 @@ export interface Declaration<Person extends Visitor | null = Visitor | null, Par
   examineFurther?: (given: unknown) => Promise<readonly Fault[]>
   /** Called before anything is read: refuses who calls too often. */
   admitRate?: (event: H3Event) => Promise<void>
-  handle: (call: Call<Person, Params, Query, Input>) => Given | Promise<Given> | AsyncIterable<StreamedEvent>
+  handle: (call: Call<Person, Params, Query, Input>) => Given | Promise<Given> | AsyncIterable<StreamedEvent> | Promise<SentFile>
 }
 
 const declarations = new WeakMap<EventHandler, Declaration>()
@@ -79,6 +83,7 @@ async function carryOut<Person extends Visitor | null, Params, Query, Input, Giv
   const given = await declaration.handle({ event, person, params, query, input, file, signal: closing(event) })
   setResponseHeader(event, 'cache-control', 'no-store')
   if (declaration.streams) return sendEvents(event, given as AsyncIterable<StreamedEvent>)
+  if (declaration.sendsFile) return sendFile(event, given as SentFile)
   setResponseStatus(event, declaration.status ?? (declaration.answer ? 200 : 204))
   // Parsing drops whatever the contract does not name and refuses NaN: nothing leaves that is not written down.
   return declaration.answer ? declaration.answer.parse(given) : null

@@ -3,7 +3,6 @@ import { id, named } from './common'
 import { day, later, laterText, positive, requiredText, text } from './forms'
 
 export const massMethods = ['SEC', 'MALDI', 'NMR', 'light-scattering', 'sequence', 'maker'] as const
-export const tacticities = ['atactic', 'isotactic-rich', 'syndiotactic-rich', 'does-not-apply'] as const
 
 /** The polymer, polypeptide or protein. Masses in g/mol. */
 export const newSampleContract = z.strictObject({

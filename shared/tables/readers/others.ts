@@ -64,6 +64,6 @@ export function readLimit(cell: ReadCell, column: PlannedColumn): Found<FoundRea
 
 /** Words of a person. The apostrophe with which spreadsheets keep text from being a formula does not belong to them. */
 export function readWords(cell: ReadCell | undefined): string | null {
-  const text = cell?.text.trim().replace(/^'(?=[=+\-@\t])/, '') ?? ''
+  const text = cell?.text.trim().replace(/^'(?='*[=+\-@\t\r])/, '') ?? ''
   return text === '' ? null : text
 }
