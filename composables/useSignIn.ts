@@ -1,12 +1,8 @@
 import { FetchError } from 'ofetch'
 import type { Problem } from '#shared/contracts/problem'
+import { returnAddress } from './returnAddress'
 
 const usualWait = 30
-
-/** Where to go after signing in: only to a page of this site. */
-function returnAddress(asked: unknown): string {
-  return typeof asked === 'string' && /^\/(?![/\\])/.test(asked) ? asked : '/projects'
-}
 
 /** Signing in: what is wrong beside which field, and how long to wait after too many misses. */
 export function useSignIn() {

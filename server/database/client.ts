@@ -23,6 +23,8 @@ function connect(connectionString: string | undefined) {
   const pool = new Pool({ connectionString, max: mostConnections })
   // An idle connection may die with the database server: unheard, that would end the process; the next query opens a fresh one.
   pool.on('error', error => reportLost(error))
+  // One that is lost in the middle of a transaction fails its query, and says so once more by itself.
+  pool.on('connect', client => client.on('error', error => reportLost(error)))
   return { pool, database: drizzle(pool, { schema }) }
 }
 

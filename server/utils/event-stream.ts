@@ -1,4 +1,5 @@
 import type { H3Event } from 'h3'
+import { logger } from './logger'
 import { stopping } from './stopping'
 
 export interface StreamedEvent {
@@ -28,6 +29,10 @@ export async function sendEvents(event: H3Event, events: AsyncIterable<StreamedE
       if (stopping.aborted || response.destroyed) break
       response.write(`id: ${id}\nevent: ${name}\ndata: ${JSON.stringify(data)}\n\n`)
     }
+  }
+  catch (error) {
+    // The head is sent: all that is left is to end. The reader comes back by itself and is told then.
+    logger().error({ requestId: event.context.requestId, err: error }, 'event stream ended early')
   }
   finally {
     clearInterval(beat)
