@@ -1,8 +1,14 @@
 import { beforeAll, describe, expect, it } from 'vitest'
-import { asOwner, clearCounters } from './support/database'
+import { asApp, asOwner, clearCounters } from './support/database'
 import { demoProject, nobody, signedInAs } from './support/server'
 
 beforeAll(clearCounters)
+
+/** Asks about the service's connections that wait for a lock; only the service's own role sees and may end them. */
+const ofWaiting = (what: string) => asApp(null, async (client) => {
+  const { rows } = await client.query(`select ${what} as answer from pg_stat_activity where usename = current_user and wait_event_type = 'Lock'`)
+  return rows[0]?.answer
+})
 
 describe('a connection that the database ends in the middle of a transaction', () => {
   it('fails its request alone; the server goes on', async () => {
@@ -13,11 +19,8 @@ describe('a connection that the database ends in the middle of a transaction', (
       await client.query('begin')
       await client.query('select 1 from project where id = $1 for update', [id])
       const waiting = owner.put(`/api/v1/projects/${id}`).send({ name: 'after the loss' }).then(({ status }) => status)
-      await expect.poll(async () => {
-        const { rows } = await client.query('select count(*)::int as count from pg_stat_activity where usename = \'anionary_app\' and wait_event_type = \'Lock\'')
-        return rows[0].count
-      }).toBe(1)
-      await client.query('select pg_terminate_backend(pid) from pg_stat_activity where usename = \'anionary_app\' and wait_event_type = \'Lock\'')
+      await expect.poll(() => ofWaiting('count(*)::int')).toBe(1)
+      await ofWaiting('pg_terminate_backend(pid)')
       await client.query('rollback')
       return waiting
     })
@@ -32,7 +35,8 @@ describe('a forged address', () => {
     await clearCounters()
     const points = [[0, 31], [0.1, 30], [0.2, 29]].map(([x, y]) => ({ x, y }))
     const statuses: number[] = []
-    for (let count = 0; count < 125; count++) {
+    // Twice the limit and more: whatever minute ends meanwhile, one of the two has too many.
+    for (let count = 0; count < 245; count++) {
       const { status } = await nobody().post('/api/v1/fit').set('x-forwarded-for', `10.0.0.${count}`).send({ model: 'linear', points })
       statuses.push(status)
     }
