@@ -1,13 +1,11 @@
 import { createHash } from 'node:crypto'
 import { desc, eq, inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
-import { ScienceError } from '#shared/science/errors'
-import { fit as fitPoints, supportOf } from '#shared/science/fitting'
-import type { FitChoice } from '#shared/contracts/series'
-import type { FitRequest, FitResult, ModelName, Point } from '#shared/science/fitting/types'
+import { choiceFaults, fitAsChosen, type ChosenFit } from '#shared/science/fitting'
+import type { FitResult, Point } from '#shared/science/fitting/types'
 import { engine } from '#shared/science/version'
 import type { Transaction } from '~~/server/database/client'
-import { fit, fitBlank, fitResult, fitRevision, series, type FitOptions } from '~~/server/database/schema'
+import { fit, fitBlank, fitResult, fitRevision, series } from '~~/server/database/schema'
 import { ServiceError } from './errors'
 import { contentOf, type SeriesContent } from './series-content'
 
@@ -18,26 +16,6 @@ export function pointsOf({ readings }: SeriesContent): Point[] {
   }))
 }
 
-/** Readings with their numbers of samples are weighted by them; otherwise the engine's default holds. */
-export function usualOptions(points: readonly Point[]): FitOptions {
-  return points.every(point => point.n !== undefined) ? { weighting: 'replicates' } : {}
-}
-
-/** A choice that says something about weights says all of it. */
-function optionsFor(points: readonly Point[], choice: FitChoice | null): FitOptions {
-  const { weighting, sdMeaning } = choice?.options ?? {}
-  return weighting || sdMeaning ? choice!.options : { ...usualOptions(points), ...choice?.options }
-}
-
-/** Three places on the axis cannot tell a line from a curve: nobody would quote a constant from them. */
-const fewestPlaces = 4
-
-/** A binding term only where the readings ask for one, else the straight line. */
-function supportedModel(points: Point[], options: FitOptions): ModelName {
-  const [line, binding] = (['linear', 'linear-langmuir'] as const).map(model => attemptFit({ ...options, model, points }))
-  return line && binding && supportOf({ ...options, points }, line, binding).verdict === 'supported' ? 'linear-langmuir' : 'linear'
-}
-
 /**
  * Fits the newest revision of a series as it asks to be fitted, and keeps the fit. Asked twice for the same thing it finds the fit that is there.
  *
@@ -45,13 +23,8 @@ function supportedModel(points: Point[], options: FitOptions): ModelName {
  */
 export async function fitSeries(tx: Transaction, who: string, id: string): Promise<string | null> {
   const content = (await contentOf(tx, [id])).get(id)
-  const points = content ? pointsOf(content) : []
-  if (!content?.revision || new Set(points.map(({ x }) => x)).size < fewestPlaces) return null
-  const { choice } = content.revision
-  const options = optionsFor(points, choice)
-  const model = choice?.model ?? supportedModel(points, options)
-  const result = attemptFit({ ...options, model, points })
-  return result ? keepFit(tx, who, id, content, { model, options, result }) : null
+  const made = content?.revision ? fitAsChosen(pointsOf(content), content.revision.choice) : null
+  return content && made ? keepFit(tx, who, id, content, made) : null
 }
 
 /**
@@ -62,33 +35,15 @@ export async function fitSeries(tx: Transaction, who: string, id: string): Promi
 export async function checkChoice(tx: Transaction, id: string): Promise<void> {
   const content = (await contentOf(tx, [id])).get(id)!
   const choice = content.revision?.choice
-  const points = pointsOf(content)
-  if (!choice) return
-  try {
-    fitPoints({ ...optionsFor(points, choice), model: choice.model ?? 'linear', points })
-  }
-  catch (error) {
-    if (!(error instanceof ScienceError)) throw error
-    const faults = error.problems.filter(({ path }) => !path.startsWith('points')).map(({ path, message }) => ({ path: path === 'model' ? 'choice.model' : `choice.options.${path}`, message }))
-    if (faults.length > 0) throw new ServiceError('invalid', 'The fit cannot be made as asked; nothing was kept.', { faults })
-  }
+  const faults = choice ? choiceFaults(pointsOf(content), choice) : []
+  if (faults.length === 0) return
+  throw new ServiceError('invalid', 'The fit cannot be made as asked; nothing was kept.', {
+    faults: faults.map(({ path, message }) => ({ path: path === 'model' ? 'choice.model' : `choice.options.${path}`, message })),
+  })
 }
-
-/** A fit, or nothing where the readings are too few for the model. */
-function attemptFit(request: FitRequest): FitResult | null {
-  try {
-    return fitPoints(request)
-  }
-  catch (error) {
-    if (error instanceof ScienceError) return null
-    throw error
-  }
-}
-
-interface MadeFit { model: ModelName, options: FitOptions, result: FitResult }
 
 // The blanks' revision and not the blanks themselves: going back to earlier blanks is a new state, and its fit the newest one.
-async function keepFit(tx: Transaction, who: string, id: string, { revision, readings, blankRevisions }: SeriesContent, { model, options, result }: MadeFit) {
+async function keepFit(tx: Transaction, who: string, id: string, { revision, readings, blankRevisions }: SeriesContent, { model, options, result }: ChosenFit) {
   const blanks = readings.filter(one => one.blank && one.entersFit).map(one => one.id)
   const asked = { revisions: [revision!.id], blanks: blankRevisions, model, options, engine: engine.version }
   const fingerprint = createHash('sha256').update(JSON.stringify(asked)).digest('hex')

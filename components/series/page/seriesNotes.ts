@@ -1,7 +1,6 @@
 import type { Series } from '#shared/contracts/series'
 import { influenceOn, type Influence } from '#shared/science/diagnostics/influence'
-import { ScienceError } from '#shared/science/errors'
-import { curveAt, fit, supportOf, type FitRequest, type FitResult } from '#shared/science/fitting'
+import { curveAt, fitOrNone, supportOf, type FitResult } from '#shared/science/fitting'
 import { fixed, plain } from '#shared/science/notation'
 import { bindingFinding, straightLineFinding } from '~~/components/ui/findings'
 import type { MarginNoteText } from '~~/components/ui/marginNoteText'
@@ -20,17 +19,6 @@ export interface KeyedNote {
 function fitWith(series: Series, reading: SeriesReading): FitResult | null {
   const request = fitRequest(series, series.readings.filter(other => other === reading || other.entersFit))
   return request && fitOrNone(request)
-}
-
-/** A fit, or nothing where the readings are too few for it. */
-function fitOrNone(request: FitRequest): FitResult | null {
-  try {
-    return fit(request)
-  }
-  catch (error) {
-    if (error instanceof ScienceError) return null
-    throw error
-  }
 }
 
 /** What putting one reading back would do to the constant that matters and to the scatter. */
