@@ -1,5 +1,6 @@
 import type { Me } from '#shared/contracts/me'
 import type { Project, ProjectDetail } from '#shared/contracts/projects'
+import type { SeriesState } from '#shared/contracts/revisions'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 
 interface PageOf<Item> { items: Item[], nextCursor: string | null }
@@ -46,4 +47,10 @@ export function useProjectSeries(project: string) {
 export function useSeries(series: string) {
   const request = useRequestFetch()
   return useAsyncData(`series ${series}`, () => request<Series>(`/api/v1/series/${series}`))
+}
+
+/** One revision of a series with its fit. */
+export function useRevision(series: string, revision: MaybeRefOrGetter<string>) {
+  const request = useRequestFetch()
+  return useAsyncData(() => `revision ${toValue(revision)} of ${series}`, () => request<SeriesState>(`/api/v1/series/${series}/revisions/${toValue(revision)}`))
 }

@@ -1,20 +1,13 @@
 import { createHash } from 'node:crypto'
 import { desc, eq, inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
-import { choiceFaults, fitAsChosen, type ChosenFit } from '#shared/science/fitting'
-import type { FitResult, Point } from '#shared/science/fitting/types'
+import { choiceFaults, fitAsChosen, pointsOf, type ChosenFit } from '#shared/science/fitting'
+import type { FitResult } from '#shared/science/fitting/types'
 import { engine } from '#shared/science/version'
 import type { Transaction } from '~~/server/database/client'
 import { fit, fitBlank, fitResult, fitRevision, series } from '~~/server/database/schema'
 import { ServiceError } from './errors'
 import { contentOf, type SeriesContent } from './series-content'
-
-/** The readings that enter a fit, with the blanks of their batches. */
-export function pointsOf({ readings }: SeriesContent): Point[] {
-  return readings.filter(one => one.entersFit).map(({ x, y, sd, n }) => ({
-    x, y, ...(sd !== null && { sd }), ...(n !== null && { n }),
-  }))
-}
 
 /**
  * Fits the newest revision of a series as it asks to be fitted, and keeps the fit. Asked twice for the same thing it finds the fit that is there.
@@ -23,7 +16,7 @@ export function pointsOf({ readings }: SeriesContent): Point[] {
  */
 export async function fitSeries(tx: Transaction, who: string, id: string): Promise<string | null> {
   const content = (await contentOf(tx, [id])).get(id)
-  const made = content?.revision ? fitAsChosen(pointsOf(content), content.revision.choice) : null
+  const made = content?.revision ? fitAsChosen(pointsOf(content.readings), content.revision.choice) : null
   return content && made ? keepFit(tx, who, id, content, made) : null
 }
 
@@ -35,7 +28,7 @@ export async function fitSeries(tx: Transaction, who: string, id: string): Promi
 export async function checkChoice(tx: Transaction, id: string): Promise<void> {
   const content = (await contentOf(tx, [id])).get(id)!
   const choice = content.revision?.choice
-  const faults = choice ? choiceFaults(pointsOf(content), choice) : []
+  const faults = choice ? choiceFaults(pointsOf(content.readings), choice) : []
   if (faults.length === 0) return
   throw new ServiceError('invalid', 'The fit cannot be made as asked; nothing was kept.', {
     faults: faults.map(({ path, message }) => ({ path: path === 'model' ? 'choice.model' : `choice.options.${path}`, message })),

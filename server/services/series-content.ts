@@ -1,6 +1,7 @@
 import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import type { FitChoice, Series } from '#shared/contracts/series'
+import { entersFit } from '#shared/science/fitting'
 import type { Transaction } from '~~/server/database/client'
 import { batch, batchRevision, batchRevisionReading, campaign, fit, fitBlank, fitRevision, person, reading, revisionReading, series, seriesRevision, upload } from '~~/server/database/schema'
 
@@ -51,7 +52,7 @@ export async function contentOf(tx: Transaction, ids: readonly string[]): Promis
 export async function blanksIn(tx: Transaction, of: string): Promise<ListedReading[]> {
   const [head] = await tx.select({ clouds: campaign.clouds }).from(batch).innerJoin(campaign, eq(campaign.id, batch.campaign)).where(eq(batch.id, of))
   const rows: Row[] = await blanksOf(tx, [of])
-  return rows.map((row, index) => ({ ...readingOf(row, branchOf(head!.clouds)), number: index + 1, blank: true }))
+  return rows.map((row, index) => ({ ...readingOf(row, head!.clouds), number: index + 1, blank: true }))
 }
 
 /** One revision with its own readings and the blanks its newest fit used; undefined where there is none of that number. */
@@ -111,26 +112,23 @@ interface Revision { id: string, number: number, choice: FitChoice | null, cloud
 function assemble(revision: Revision | undefined, own: Row[], allBlanks: Row[]): SeriesContent {
   const batches = new Set(own.map(row => row.batch))
   const blanks = allBlanks.filter(row => batches.has(row.batch))
-  const branch = branchOf(revision?.clouds)
   const listed = [...blanks.map(row => ({ row, blank: true })), ...own.map(row => ({ row, blank: false }))]
   const days = own.flatMap(row => row.batchDay ?? []).sort()
   return {
     revision: revision ? { id: revision.id, number: revision.number, choice: revision.choice } : null,
-    readings: listed.map(({ row, blank }, index) => ({ ...readingOf(row, branch), number: index + 1, blank })),
+    readings: listed.map(({ row, blank }, index) => ({ ...readingOf(row, revision?.clouds), number: index + 1, blank })),
     firstDay: days[0] ?? null,
     blankRevisions: [...new Set(blanks.map(row => row.revision))].sort(),
   }
 }
 
-const branchOf = (clouds: Revision['clouds'] | undefined) => clouds === 'on-cooling' ? 'cooling' : 'heating'
-
-function readingOf(row: Row, branch: 'heating' | 'cooling'): Omit<ListedReading, 'number' | 'blank'> {
+function readingOf(row: Row, clouds: Revision['clouds'] | undefined): Omit<ListedReading, 'number' | 'blank'> {
   const { id, x, y, sd, n, direction, limit, note, batch, batchLabel, reason, by, at, changeReason, changeWords } = row
   return {
     id, x, y, sd, n, direction, limit, note,
     batch: batch ? { id: batch, label: batchLabel ?? '' } : null,
     setAside: reason && at ? { reason, by: by ?? 'a former member', at: at.toISOString() } : null,
-    entersFit: limit === 'exact' && !reason && direction === branch,
+    entersFit: entersFit({ limit, direction, setAside: reason }, clouds),
     changed: row.replaces && changeReason ? { ...row.replaces, reason: changeReason, words: changeWords } : null,
     origin: originInWords(row),
   }

@@ -1,14 +1,14 @@
 import { and, asc, desc, eq, gt, isNull } from 'drizzle-orm'
 import type { Series, SeriesSummary } from '#shared/contracts/series'
 import { ScienceError } from '#shared/science/errors'
-import { usualOptions } from '#shared/science/fitting'
+import { pointsOf, usualOptions } from '#shared/science/fitting'
 import { asPerson, type Transaction } from '~~/server/database/client'
 import { campaign, lab, person, project, sample, series, seriesRevision, stock } from '~~/server/database/schema'
 import { batchesIn } from './campaign-content'
 import { conditionsOf } from './conditions'
 import { ServiceError } from './errors'
 import { compareInPool } from './fit-pool'
-import { currentFits, pointsOf } from './fits'
+import { currentFits } from './fits'
 import { cursorOf, pageOf, type Page } from './pages'
 import { mayEdit, roleIn } from './projects'
 import { contentOf, type SeriesContent } from './series-content'
@@ -57,6 +57,7 @@ export async function showSeries(who: string, id: string): Promise<Series> {
     project: head.project,
     salt: saltOf(head),
     campaign: { ...campaignOf(head), conditions: conditionsOf(head) },
+    stock: stockOf(head, content.firstDay),
     canEdit: mayEdit(role),
     revision: content.revision?.number ?? null,
     choice: content.revision?.choice ?? null,
@@ -84,7 +85,7 @@ async function revisionsOf(tx: Transaction, id: string): Promise<Series['revisio
 }
 
 async function supportFor(content: SeriesContent): Promise<Series['support']> {
-  const points = pointsOf(content)
+  const points = pointsOf(content.readings)
   if (points.length === 0) return { verdict: null, models: [] }
   try {
     const { verdict, models } = await compareInPool({ ...usualOptions(points), points })

@@ -109,6 +109,7 @@ export const seriesContract = z.object({
   campaign: campaignSummaryContract.extend({
     conditions: z.string().describe('sample, concentration, direction and rate in a sentence'),
   }),
+  stock: stockSummaryContract.nullable(),
   canEdit: z.boolean(),
   revision: z.number().int().nullable(),
   choice: fitChoiceContract.nullable().describe('how this revision asks to be fitted; null: the form its readings support'),

@@ -1,4 +1,5 @@
 import type { Series } from '#shared/contracts/series'
+import { pointsOf } from '#shared/science/fitting'
 import type { NamedRequest } from '#shared/science/diagnostics/influence'
 
 export type SeriesReading = Series['readings'][number]
@@ -16,7 +17,7 @@ export function fitRequest(series: Series, readings = usedReadings(series)): Nam
     model: fit.model,
     weighting: fit.weighting,
     sdMeaning: fit.sdMeaning,
-    points: readings.map(({ x, y, sd, n }) => ({ x, y, ...(sd !== null && { sd }), ...(n !== null && { n }) })),
+    points: pointsOf(readings.map(reading => ({ ...reading, entersFit: true }))),
   }
 }
 

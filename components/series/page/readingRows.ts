@@ -35,8 +35,20 @@ export function keysOf(readings: readonly SeriesReading[]): Map<number, string> 
   return new Map(aside.map((reading, index) => [reading.number, String.fromCharCode(97 + index)]))
 }
 
+/** The value before the last correction, where the cloud point or the concentration was corrected. */
+function formerWords({ x, y, changed }: SeriesReading): string {
+  if (!changed) return ''
+  const print = (value: number) => value.toFixed(decimalsOf([value]))
+  return [changed.x !== x && `was at ${print(changed.x)} M`, changed.y !== y && `was ${print(changed.y)}`].filter(Boolean).join(', ')
+}
+
+/** A reading of the other branch is kept and drawn; it takes no part in the fit. */
+function branchWords({ direction, limit, setAside, entersFit }: SeriesReading): string {
+  return entersFit || setAside || limit !== 'exact' ? '' : `on ${direction}, not in the fit`
+}
+
 function noteOf(reading: SeriesReading): string {
-  return [reading.blank && 'blank', limitWords[reading.limit], reading.note].filter(Boolean).join('; ')
+  return [reading.blank && 'blank', limitWords[reading.limit], branchWords(reading), formerWords(reading), reading.note].filter(Boolean).join('; ')
 }
 
 export function readingRows({ readings, fit }: Series): ReadingRow[] {

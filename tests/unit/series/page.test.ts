@@ -22,6 +22,7 @@ const series: Series = {
   project: { id, name: 'Shadehouse gel' },
   salt: { formula: 'NaSCN', name: 'sodium thiocyanate', anion: 'SCN^-', cation: 'Na^+' },
   campaign: { id, name: 'spring', lab: { id, name: 'Norrvik' }, clouds: 'on-heating', conditions: '' },
+  stock: null,
   canEdit: true,
   revision: 4,
   choice: null,
