@@ -12,7 +12,7 @@ export function constantsText(fit: FitResult): string {
     ...fit.derived.map(({ name, estimate, standardError, unit }) => [name, cell(estimate), cell(standardError), '', '', unit]),
     ['model', fit.model],
     ['readings', String(fit.n)],
-    ['residual standard deviation', cell(fit.residualStandardDeviation), '', '', '', 'K'],
+    ['residual standard deviation', cell(fit.residualStandardDeviation), '', '', '', fit.weighting === 'sd' ? 'stated standard uncertainties' : 'K'],
     ['engine', `${fit.engine.name} ${fit.engine.version}`],
   ]
   return `${lines.map(line => line.join('\t')).join('\n')}\n`

@@ -17,9 +17,10 @@ const criteria: Record<NonNullable<typeof campaign.$inferSelect.criterion>, stri
 export function conditionsOf({ campaign, sample }: Setting): string {
   const { polymerConcentration, solvent, buffer, clouds, rate, criterion, criterionFraction } = campaign
   const amount = polymerConcentration === null ? '' : `, ${polymerConcentration} g L⁻¹`
+  const medium = [solvent, buffer].filter(Boolean).join(', ')
   const by = criterion === 'fraction' && criterionFraction ? `${criterionFraction * 100} % transmittance` : criterion && criteria[criterion]
   return [
-    `${sample?.name ?? 'sample not stated'}${amount} in ${[solvent, buffer].filter(Boolean).join(', ')}`,
+    sample ? `${sample.name}${amount} in ${medium}` : `sample not stated${amount}, in ${medium}`,
     clouds === 'on-heating' ? 'clouds on heating' : 'clouds on cooling',
     rate === null ? 'rate not stated' : `${rate} K min⁻¹`,
     by,

@@ -56,7 +56,7 @@ describe('keeping a revision', () => {
     const corrected = own(after)[4]!
     expect(corrected).toMatchObject({ y: 32.2, x: target.x, number: target.number, changed: { y: target.y, reason: 'typing-error', words: null }, origin: 'typed' })
     expect(corrected.id).not.toBe(target.id)
-    expect(after.revisions[0]).toMatchObject({ number: 2, summary: 'reading 5 corrected from 32.09, a typing error' })
+    expect(after.revisions[0]).toMatchObject({ number: 2, summary: 'reading at 0.30 M corrected from 32.09, a typing error' })
     expect(estimate(after, 'K')).not.toBe(estimate(before, 'K'))
     const first = seriesStateContract.parse((await owner.get(`/api/v1/series/${before.id}/revisions/1`).expect(200)).body)
     expect(first.readings.map(({ y }) => y)).toEqual(before.readings.map(({ y }) => y))

@@ -28,7 +28,7 @@ export function curveShapes({ curve, readings, isSketch }: FigureContent, frame:
     const sketch = pixels(curve, curve.y, frame, frame.xAxis.min, frame.xAxis.max)
     return [{ kind: 'path', d: polyline(sketch), stroke: palette.rule, width: 1.7, dash: dashes }]
   }
-  const used = readings.filter(reading => !reading.setAside).map(reading => reading.x)
+  const used = readings.filter(reading => !reading.setAside && !reading.apart).map(reading => reading.x)
   const [first, last] = [Math.min(...used), Math.max(...used)]
   const part = (from: number, to: number, dash?: number[]): PathShape[] => {
     const points = pixels(curve, curve.y, frame, from, to)

@@ -52,7 +52,7 @@ export function residualsOf(content: FigureContent) {
   const { curve } = content
   if (!curve || content.isSketch) return []
   return content.readings
-    .filter(reading => (reading.limit ?? 'exact') === 'exact')
+    .filter(reading => (reading.limit ?? 'exact') === 'exact' && !reading.apart)
     .map(reading => ({ reading, residual: reading.y - sampleAt(curve, curve.y, reading.x) }))
 }
 

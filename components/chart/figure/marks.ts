@@ -49,6 +49,7 @@ function limitShapes(reading: FigureReading, x: number, y: number, palette: Pale
 /** Blanks are grey rings, all others carry the mark of the anion. */
 function usedMark(reading: FigureReading, ion: string | null, x: number, y: number, radius: number, palette: Palette): Shape[] {
   const isBlank = reading.blank || reading.x === 0
+  if (reading.apart && !isBlank) return ionMarkShapes(ion, x, y, radius, { ...palette, front: palette.rule })
   return isBlank ? [ring(x, y, radius * 0.75, palette)] : ionMarkShapes(ion, x, y, radius, palette)
 }
 

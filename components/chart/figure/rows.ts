@@ -23,6 +23,7 @@ export function figureRows(content: FigureContent): FigureRow[] {
 /** Why a reading does not count, in words; empty when it does. */
 export function standing(reading: FigureReading): string {
   if (reading.setAside) return 'set aside'
+  if (reading.apart) return 'on the other branch, not in the fit'
   const words = { 'exact': '', 'below': 'cloud point lies below', 'above': 'cloud point lies above', 'salt-precipitated': 'salt precipitated' } as const
   return words[reading.limit ?? 'exact'] || (reading.blank || reading.x === 0 ? 'blank' : '')
 }

@@ -11,6 +11,8 @@ export interface FigureReading {
   /** independent samples */
   n?: number | null
   setAside?: boolean
+  /** measured on the other branch: drawn grey, and no residual of this curve */
+  apart?: boolean
   blank?: boolean
   limit?: 'exact' | 'below' | 'above' | 'salt-precipitated'
   /** letter that ties the reading to a margin note */

@@ -17,3 +17,9 @@ export function listed(items: readonly string[]): string {
 }
 
 export const capitalized = (sentence: string) => sentence.charAt(0).toUpperCase() + sentence.slice(1)
+
+/** Words that somebody typed, as a sentence. */
+export function asSentence(words: string): string {
+  const trimmed = words.trim()
+  return capitalized(/[.!?…]$/.test(trimmed) ? trimmed : `${trimmed}.`)
+}

@@ -91,6 +91,7 @@ export function useSeriesEditing(series: Ref<Series>) {
     const problem = error instanceof FetchError ? error.data as Partial<Problem> | undefined : undefined
     if (problem?.status === 409 && problem.current) {
       conflict.value = { base: conflict.value?.base ?? series.value, theirs: problem.current as Series }
+      keeping.keep(series.value.revision, draft.value)
       return
     }
     refused.value = placedFaults(problem?.errors ?? [], edited.value.request.rows)
@@ -120,8 +121,9 @@ export function useSeriesEditing(series: Ref<Series>) {
     if (kept.from === series.value.revision) return
     const theirs = series.value
     const state = kept.from === null ? null : await $fetch<SeriesState>(`${address}/revisions/${kept.from}`) as SeriesState
-    series.value = withCurrentBlanks(asRevision(theirs, state), theirs)
-    conflict.value = { base: series.value, theirs }
+    const base = withCurrentBlanks(asRevision(theirs, state), theirs)
+    series.value = base
+    conflict.value = { base, theirs }
   }
 
   return { series, draft, edited, settled, past, isAsked, isBusy, refused, refusal, conflict, restoredAt, draftState: keeping.state, act, undo, keep, send, giveUp, restore }

@@ -53,7 +53,7 @@ function noteOf(reading: SeriesReading): string {
 
 export function readingRows({ readings, fit }: Series): ReadingRow[] {
   const fitted = fit && curveAt(fit, readings.map(({ x }) => x))
-  const residuals = readings.map(({ y }, index) => fitted ? y - fitted[index]! : null)
+  const residuals = readings.map(({ y, entersFit, setAside }, index) => fitted && (entersFit || setAside) ? y - fitted[index]! : null)
   const largest = Math.max(1e-9, ...residuals.map((residual, index) => readings[index]!.setAside ? 0 : Math.abs(residual ?? 0)))
   const [xDecimals, yDecimals] = [decimalsOf(readings.map(({ x }) => x)), decimalsOf(readings.map(({ y }) => y))]
   const keys = keysOf(readings)

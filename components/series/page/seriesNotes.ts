@@ -9,6 +9,7 @@ import { quantitySymbol, unitMarkup } from '~~/components/ui/quantityNames'
 import { fitRequest, leadingConstant, usedReadings, type SeriesReading } from './fitInput'
 import { formNames } from './modelRows'
 import { keysOf } from './readingRows'
+import { inScatters, scatterUnit } from './scatter'
 
 /** A margin note with the letter of the place it speaks of. */
 export interface KeyedNote {
@@ -27,7 +28,7 @@ function consequence(series: Series, restored: FitResult | null): string {
   const back = restored?.parameters.find(({ name }) => name === leading?.name)?.estimate
   const scatter = [series.fit?.residualStandardDeviation, restored?.residualStandardDeviation]
   if (!leading || scatter.some(value => typeof value !== 'number')) return ''
-  const values = `the scatter from ${fixed(scatter[0]!, 2)} to ${fixed(scatter[1]!, 2)} K.`
+  const values = `the scatter from ${fixed(scatter[0]!, 2)} to ${fixed(scatter[1]!, 2)} ${scatterUnit(series.fit?.weighting).words}.`
   if (typeof back !== 'number') return ` Putting it back would leave ${quantitySymbol(leading.name)} open and move ${values}`
   return ` Putting it back would move ${quantitySymbol(leading.name)} from ${plain(leading.estimate, 3)} to ${plain(back, 3)} ${unitMarkup(leading.unit)} and ${values}`
 }
@@ -36,11 +37,11 @@ function setAsideNotes(series: Series): KeyedNote[] {
   const keys = keysOf(series.readings)
   return series.readings.filter(reading => reading.setAside).map((reading) => {
     const curve = series.fit && curveAt(series.fit, [reading.x])
-    const scatter = series.fit?.residualStandardDeviation
     const distance = curve ? reading.y - curve[0]! : null
+    const times = distance !== null && series.fit ? inScatters(distance, reading.sd, series.fit) : null
     const place = distance === null
       ? `Reading ${reading.number} is kept and drawn, and takes no part in a fit.`
-      : `Reading ${reading.number} sits ${fixed(Math.abs(distance), 2)} K ${distance < 0 ? 'below' : 'above'} the curve${scatter ? `, ${fixed(Math.abs(distance) / scatter, 0)} times the scatter` : ''}.`
+      : `Reading ${reading.number} sits ${fixed(Math.abs(distance), 2)} K ${distance < 0 ? 'below' : 'above'} the curve${times === null ? '' : `, ${fixed(times, times < 2 ? 1 : 0)} times the scatter`}.`
     return {
       letter: keys.get(reading.number),
       note: { heading: 'One reading is set aside', sentences: [place + (distance === null ? '' : consequence(series, fitWith(series, reading)))] },

@@ -48,7 +48,8 @@ export function readingWords(reading: SeriesReading | undefined, which: readonly
 }
 
 export function placeLabel(reading: SeriesReading): string {
-  return reading.blank ? `reading ${reading.number}, a blank` : `reading ${reading.number}, ${printed(reading.x)} M`
+  const branch = reading.direction === 'cooling' ? ', cooling' : ''
+  return reading.blank ? `blank of ${reading.batch?.label ?? 'the batch'}${branch}` : `${printed(reading.x)} M${branch}`
 }
 
 /** Batches with the revision of their blanks, as changes to them must name it. */

@@ -12,6 +12,9 @@ const weightWords = { none: 'equal weights', replicates: 'weights from replicate
 const several = (count: number, one: string, many: string) => count === 1 ? one : `${count} ${many}`
 const printed = (value: number) => fixed(value, Math.max(2, String(value).split('.')[1]?.length ?? 0))
 
+/** A reading by its concentration: its place in the table shifts with the blanks before it. */
+const named = ({ number, before }: Told) => before && before.concentration > 0 ? `reading at ${printed(before.concentration)} M` : `reading ${number}`
+
 /** What was done, in a line for the history: '2 readings set aside, with reasons'. */
 export function summaryOf(told: readonly Told[], choice: FitChoice | undefined, before: FitChoice | null): string {
   const parts = [...correctionWords(told), ...asideWords(told), ...addedWords(told), ...(choice ? choiceWords(choice, before) : [])]
@@ -22,18 +25,18 @@ function correctionWords(told: readonly Told[]): string[] {
   const corrections = told.flatMap(({ change, number, before }) => change.kind === 'correct' && before ? [{ change, number, before }] : [])
   const [first] = corrections
   if (!first || corrections.length > 1) return first ? [`${corrections.length} readings corrected`] : []
-  const { change, number, before } = first
+  const { change, before } = first
   const from = change.to.y !== undefined && change.to.y !== before.value ? ` from ${printed(before.value)}` : ''
   const why = reasonWords[change.reason] ?? change.words
-  return [`reading ${number} corrected${from}${why ? `, ${why}` : ''}`]
+  return [`${named(first)} corrected${from}${why ? `, ${why}` : ''}`]
 }
 
 function asideWords(told: readonly Told[]): string[] {
   const aside = told.filter(({ change }) => change.kind === 'set-aside')
   const back = told.filter(({ change }) => change.kind === 'put-back')
   return [
-    ...(aside.length > 0 ? [several(aside.length, `reading ${aside[0]!.number} set aside, with its reason`, 'readings set aside, with reasons')] : []),
-    ...(back.length > 0 ? [several(back.length, `reading ${back[0]!.number} put back`, 'readings put back')] : []),
+    ...(aside.length > 0 ? [several(aside.length, `${named(aside[0]!)} set aside, with its reason`, 'readings set aside, with reasons')] : []),
+    ...(back.length > 0 ? [several(back.length, `${named(back[0]!)} put back`, 'readings put back')] : []),
   ]
 }
 

@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import type { Series } from '#shared/contracts/series'
 import { compareModels, fit } from '#shared/science/fitting'
+import { figureReadings } from '~~/components/series/page/figureReadings'
+import { inScatters, scatterUnit } from '~~/components/series/page/scatter'
 import { keysOf, readingRows } from '~~/components/series/page/readingRows'
 import { modelRows } from '~~/components/series/page/modelRows'
 import { fitRequest, leadingConstant, usedReadings } from '~~/components/series/page/fitInput'
@@ -93,5 +95,29 @@ describe('seriesNotes', () => {
   it('judges the constant that matters: K where the salt binds', () => {
     expect(leadingConstant(series)!.name).toBe('K')
     expect(leadingConstant(bare)).toBeNull()
+  })
+})
+
+describe('the scatter of a fit', () => {
+  const base = { residualStandardDeviation: 2 }
+
+  it('is in kelvin, or with weights by uncertainty a multiple of what was stated', () => {
+    expect(scatterUnit('replicates').symbol).toBe('K')
+    expect(scatterUnit('sd').words).toBe('times the stated uncertainties')
+  })
+
+  it('measures a distance in its own unit', () => {
+    expect(inScatters(-0.5, 0.1, { ...base, weighting: 'none' })).toBe(0.25)
+    expect(inScatters(-0.5, 0.1, { ...base, weighting: 'sd' })).toBe(2.5)
+    expect(inScatters(-0.5, null, { ...base, weighting: 'sd' })).toBeNull()
+  })
+})
+
+describe('readings of the other branch', () => {
+  const cooled: Series = { ...series, readings: series.readings.map(one => one.number === 5 ? { ...one, direction: 'cooling', entersFit: false } : one) }
+
+  it('are drawn apart, without a residual, and said to be out of the fit', () => {
+    expect(figureReadings(cooled).filter(({ apart }) => apart).map(({ number }) => number)).toEqual([5])
+    expect(readingRows(cooled)[4]).toMatchObject({ residual: '', bar: null, note: expect.stringContaining('on cooling, not in the fit') })
   })
 })
