@@ -1,3 +1,4 @@
+import type { ProjectFront } from '#shared/contracts/front'
 import type { Me } from '#shared/contracts/me'
 import type { Project, ProjectDetail } from '#shared/contracts/projects'
 import type { SeriesState } from '#shared/contracts/revisions'
@@ -35,6 +36,12 @@ export function useProjects() {
 export function useProject(project: string) {
   const request = useRequestFetch()
   return useAsyncData(`project ${project}`, () => request<ProjectDetail>(`/api/v1/projects/${project}`))
+}
+
+/** What the front page of a project tells. */
+export function useProjectFront(project: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`front of ${project}`, () => request<ProjectFront>(`/api/v1/projects/${project}/front`))
 }
 
 /** Every series of a project with its readings and current fit. */

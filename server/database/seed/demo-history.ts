@@ -6,12 +6,16 @@ import type { DemoReading } from '~~/data-seeds/demo/generate'
 export interface KnownReading {
   id: string
   row: DemoReading
+  /** the reading it took the place of, and why */
+  replaces?: { id: string, words: string }
 }
 
 export interface PlannedRevision {
   summary: string
   by: string
   at: Date
+  /** the one value before and after */
+  values?: { before: number, after: number }
   readings: { reading: KnownReading, isSetAside: boolean }[]
 }
 
@@ -31,12 +35,13 @@ function typedWithSlip(readings: readonly KnownReading[], by: string): PlannedRe
   const slipped = readings.map(reading =>
     reading.row.concentration === concentration ? { id: v7(), row: { ...reading.row, value: typed } } : reading)
   const mended = readings.map(reading =>
-    reading.row.concentration === concentration ? { ...reading, row: { ...reading.row, note: `was ${typed.toFixed(2)}: ${note}` } } : reading)
+    reading.row.concentration === concentration ? { ...reading, replaces: { id: slipped.find(({ row }) => row.concentration === concentration)!.id, words: note } } : reading)
+  const after = readings.find(({ row }) => row.concentration === concentration)!.row.value
   const half = 10
   return [
     { summary: `${half} readings typed in from the lab book`, by, at: afternoon(day, 14), readings: plain(slipped.slice(0, half)) },
     { summary: `${readings.length - half} readings added`, by, at: afternoon(day, 17), readings: plain(slipped) },
-    { summary: `reading at ${molar(concentration)} corrected from ${typed.toFixed(2)}: ${note}`, by, at: afternoon(day, 18), readings: plain(mended) },
+    { summary: `reading at ${molar(concentration)} corrected from ${typed.toFixed(2)}: ${note}`, by, at: afternoon(day, 18), readings: plain(mended), values: { before: typed, after } },
   ]
 }
 

@@ -6,7 +6,7 @@ import table from '~~/data-seeds/demo/readings.tsv'
 import setting from '~~/data-seeds/demo/setting.json'
 import truth from '~~/data-seeds/demo/truth.json'
 import type { Transaction } from '../client'
-import { batchRevision, batchRevisionReading, reading, revisionReading, series, seriesRevision } from '../schema'
+import { auditEvent, batchRevision, batchRevisionReading, reading, revisionReading, series, seriesRevision } from '../schema'
 import { historyOf, type KnownReading, type PlannedRevision } from './demo-history'
 import { batchKey, campaignKey, labNames, plantPlaces, stockKey, type LabName, type Places } from './demo-places'
 import { peopleByEmail, projectByName, type Seed } from './seeding'
@@ -44,7 +44,7 @@ function planSeries(project: string, places: Places, readings: readonly DemoRead
 }
 
 /** A row as the table of readings holds it. The standard uncertainty of a mean is its replicates' scatter over √n. */
-function readingRow(project: string, places: Places, row: DemoReading, id: string, plan: SeriesPlan | null) {
+function readingRow(project: string, places: Places, { id, row, replaces }: KnownReading, plan: SeriesPlan | null) {
   return {
     id,
     project,
@@ -61,6 +61,7 @@ function readingRow(project: string, places: Places, row: DemoReading, id: strin
     rate: truth.labs[row.lab as LabName].rate,
     note: row.note || null,
     origin: { kind: 'demonstration' as const },
+    ...(replaces && { replaces: replaces.id, changeReason: 'typing-error' as const, changeWords: replaces.words }),
   }
 }
 
@@ -69,6 +70,10 @@ async function plantRevisions(tx: Transaction, project: string, plan: SeriesPlan
     const id = v7()
     const by = people.get(revision.by)!
     await tx.insert(seriesRevision).values({ id, project, series: plan.id, number: index + 1, summary: revision.summary, madeBy: by, createdAt: revision.at })
+    await tx.insert(auditEvent).values({
+      person: by, project, action: 'revised', subject: 'series', subjectId: plan.id, at: revision.at,
+      values: { number: index + 1, summary: revision.summary, ...revision.values },
+    })
     await tx.insert(revisionReading).values(revision.readings.map(({ reading: { id: readingId, row }, isSetAside }, place) => ({
       project,
       revision: id,
@@ -113,8 +118,8 @@ export const demo: Seed = {
     await tx.insert(series).values(plans.map(plan => plan.row))
     const blanks = readings.filter(row => !row.anion).map((row): KnownReading => ({ id: v7(), row }))
     await tx.insert(reading).values([
-      ...blanks.map(({ id, row }) => readingRow(project, places, row, id, null)),
-      ...plans.flatMap(plan => readingsOf(plan).map(({ id, row }) => readingRow(project, places, row, id, plan))),
+      ...blanks.map(known => readingRow(project, places, known, null)),
+      ...plans.flatMap(plan => readingsOf(plan).map(known => readingRow(project, places, known, plan))),
     ])
     await plantBlanks(tx, project, places, blanks, people)
     for (const plan of plans) await plantRevisions(tx, project, plan, people)
