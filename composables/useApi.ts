@@ -1,4 +1,6 @@
 import type { ProjectFront } from '#shared/contracts/front'
+import type { Campaign } from '#shared/contracts/campaigns'
+import type { Materials } from '#shared/contracts/materials'
 import type { Me } from '#shared/contracts/me'
 import type { Project, ProjectDetail } from '#shared/contracts/projects'
 import type { SeriesState } from '#shared/contracts/revisions'
@@ -60,4 +62,16 @@ export function useSeries(series: string) {
 export function useRevision(series: string, revision: MaybeRefOrGetter<string>) {
   const request = useRequestFetch()
   return useAsyncData(() => `revision ${toValue(revision)} of ${series}`, () => request<SeriesState>(`/api/v1/series/${series}/revisions/${toValue(revision)}`))
+}
+
+/** Samples, stocks and instruments that a project has to choose from. */
+export function useMaterials(project: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`materials of ${project}`, () => request<Materials>(`/api/v1/projects/${project}/materials`))
+}
+
+/** One campaign with its conditions, batches and series. */
+export function useCampaign(campaign: string) {
+  const request = useRequestFetch()
+  return useAsyncData(`campaign ${campaign}`, () => request<Campaign>(`/api/v1/campaigns/${campaign}`))
 }

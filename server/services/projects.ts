@@ -1,7 +1,7 @@
 import { and, asc, eq, gt, isNull } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import type { z } from 'zod'
-import type { newProjectContract, Project, ProjectDetail } from '#shared/contracts/projects'
+import type { changeProjectContract, newProjectContract, Project, ProjectDetail } from '#shared/contracts/projects'
 import { asPerson, type Transaction } from '~~/server/database/client'
 import { campaign, lab, membership, person, project, projectLab, projectMember } from '~~/server/database/schema'
 import { note } from './audit'
@@ -53,7 +53,7 @@ export function makeProject(who: string, { name, question }: z.infer<typeof newP
 }
 
 /** Changes name and question. */
-export function changeProject(who: string, id: string, { name, question }: z.infer<typeof newProjectContract>): Promise<Project> {
+export function changeProject(who: string, id: string, { name, question }: z.infer<typeof changeProjectContract>): Promise<Project> {
   return asPerson(who, async (tx) => {
     await tx.update(project).set({ name, question: question ?? null }).where(eq(project.id, id))
     await note(tx, who, { project: id, action: 'changed', subject: 'project', id, values: { name } })

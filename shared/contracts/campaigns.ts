@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { id, named } from './common'
-import { day, later, laterText, positive, requiredText, text } from './forms'
+import { day, later, laterText, number, positive, requiredText, text } from './forms'
 import { instrumentContract, sampleContract } from './materials'
 import { saltContract } from './series'
 
@@ -14,19 +14,19 @@ export const replicateKinds = ['independent-samples', 'repeat-scans'] as const
 /** Left out: not stated here (a copy keeps what it copies); null: left for later. */
 const campaignFields = {
   name: requiredText(120),
-  clouds: z.enum(cloudings).optional(),
+  clouds: z.enum(cloudings, 'must be chosen').optional(),
   sample: id.nullish(),
   instrument: id.nullish(),
   solvent: requiredText(120).optional(),
   buffer: text(200).nullish().describe('its ions are outside the varied concentration'),
-  ph: z.number('must be a number').min(-2, 'must be −2 or more').max(16, 'must be at most 16').nullish(),
+  ph: number.min(-2, 'must be −2 or more').max(16, 'must be at most 16').nullish(),
   polymerConcentration: positive.nullish().describe('g/L'),
   criterion: z.enum(criteria).nullish(),
   criterionFraction: positive.lt(1, 'must be below 1').nullish().describe('fraction of the transmittance, with criterion "fraction"'),
   rate: positive.nullish().describe('K/min'),
-  hold: z.number('must be a number').min(0, 'must be 0 or more').nullish().describe('min held before a ramp'),
+  hold: number.min(0, 'must be 0 or more').nullish().describe('min held before a ramp'),
   replicateKind: z.enum(replicateKinds).nullish().describe('what a replicate is'),
-  transitionEnthalpy: z.number('must be a number').nullish().describe('kJ/mol'),
+  transitionEnthalpy: number.nullish().describe('kJ/mol'),
   transitionEnthalpyBasis: z.enum(enthalpyBases).nullish(),
   startedOn: day.nullish(),
 } as const
@@ -48,7 +48,7 @@ export const batchContract = z.object({
 export const newBatchContract = z.strictObject({
   label: requiredText(80),
   measuredOn: later(day),
-  referenceCheck: later(z.number()).describe('cloud point of the agreed reference sample in this run, °C'),
+  referenceCheck: later(number).describe('cloud point of the agreed reference sample in this run, °C'),
   note: laterText(500),
 })
 

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { id, named } from './common'
-import { day, later, laterText, positive, requiredText, text } from './forms'
+import { day, later, laterText, number, positive, requiredText, text } from './forms'
 
 export const massMethods = ['SEC', 'MALDI', 'NMR', 'light-scattering', 'sequence', 'maker'] as const
 
@@ -9,7 +9,7 @@ export const newSampleContract = z.strictObject({
   name: requiredText(120),
   numberMeanMass: later(positive).describe('Mn, g/mol'),
   weightMeanMass: later(positive).describe('Mw, g/mol'),
-  dispersity: later(z.number().min(1, 'must be 1 or more')).describe('Mw/Mn'),
+  dispersity: later(number.min(1, 'must be 1 or more')).describe('Mw/Mn'),
   massMethod: later(text(80)).describe(`how the masses were found, such as ${massMethods.join(', ')}`),
   endGroups: laterText(200),
   tacticity: later(text(80)),
@@ -26,12 +26,12 @@ export type Sample = z.infer<typeof sampleContract>
 export const newStockContract = z.strictObject({
   lab: id,
   salt: requiredText(120).describe('formula or name, with its hydrate, such as Na2SO4·10H2O'),
-  hydrate: later(z.number().min(0, 'must be 0 or more').max(30, 'must be at most 30')).describe('waters a formula unit, where the salt does not say it'),
+  hydrate: later(number.min(0, 'must be 0 or more').max(30, 'must be at most 30')).describe('waters a formula unit, where the salt does not say it'),
   lot: laterText(80),
   purity: later(positive.max(1, 'must be at most 1')).describe('mass fraction'),
   madeOn: later(day),
   assay: later(positive).describe('measured concentration over the labelled one'),
-  relativeUncertainty: later(z.number().min(0, 'must be 0 or more').max(1, 'must be at most 1')).describe('relative standard uncertainty of the concentration'),
+  relativeUncertainty: later(number.min(0, 'must be 0 or more').max(1, 'must be at most 1')).describe('relative standard uncertainty of the concentration'),
   makeUp: laterText(300).describe('how it was made up: by volume or by mass, at which temperature'),
 })
 export const stockContract = z.object({
@@ -44,13 +44,13 @@ export const instrumentKinds = ['transmittance', 'absorbance', 'scattering', 'by
 export const newInstrumentContract = z.strictObject({
   lab: id,
   name: requiredText(120),
-  kind: z.enum(instrumentKinds),
+  kind: z.enum(instrumentKinds, 'must be chosen'),
   pathLength: later(positive).describe('mm'),
   wavelength: later(positive).describe('nm'),
   probePlace: laterText(200).describe('where the thermometer sits'),
   calibratedOn: later(day),
-  offset: later(z.number()).describe('read minus true, K'),
-  offsetUncertainty: later(z.number().min(0, 'must be 0 or more')).describe('K'),
+  offset: later(number).describe('read minus true, K'),
+  offsetUncertainty: later(number.min(0, 'must be 0 or more')).describe('K'),
   offsetStatedOn: later(day),
 })
 export const instrumentContract = z.object({

@@ -4,9 +4,15 @@ import { projectRoles } from './me'
 
 export const projectParams = z.object({ project: id })
 
-export const newProjectContract = z.strictObject({
+const projectFields = {
   name: z.string().trim().min(1, 'must not be empty').max(120, 'must have at most 120 characters'),
   question: z.string().trim().max(1_000, 'must have at most 1000 characters').nullish().describe('what the project wants to know'),
+} as const
+
+export const changeProjectContract = z.strictObject(projectFields)
+export const newProjectContract = z.strictObject({
+  ...projectFields,
+  lab: z.string().trim().min(1, 'must not be empty').max(120, 'must have at most 120 characters').optional().describe('name of the lab to make, for a person who is in none'),
 })
 
 export const projectContract = z.object({

@@ -1,4 +1,4 @@
-import { newProjectContract, projectContract, projectParams } from '#shared/contracts/projects'
+import { changeProjectContract, projectContract, projectParams } from '#shared/contracts/projects'
 import { changeProject } from '~~/server/services/projects'
 import { projectOwner } from '~~/server/utils/access'
 import { route } from '~~/server/utils/route'
@@ -8,7 +8,7 @@ export default route({
   summary: 'Change a project',
   access: projectOwner,
   params: projectParams,
-  input: newProjectContract,
+  input: changeProjectContract,
   answer: projectContract,
   handle: ({ person, params, input }) => changeProject(person.id, params.project, input),
 })
