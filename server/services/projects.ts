@@ -5,6 +5,7 @@ import type { changeProjectContract, newProjectContract, Project, ProjectDetail 
 import { asPerson, type Transaction } from '~~/server/database/client'
 import { campaign, lab, membership, person, project, projectLab, projectMember } from '~~/server/database/schema'
 import { note } from './audit'
+import { beginLab } from './new-lab'
 import { cursorOf, pageOf, type Page } from './pages'
 
 export type ProjectRole = typeof projectMember.$inferSelect.role
@@ -40,10 +41,11 @@ export function listProjects(who: string, page: Page) {
   })
 }
 
-/** Makes a project that the person owns; their labs take part in it. */
-export function makeProject(who: string, { name, question }: z.infer<typeof newProjectContract>): Promise<Project> {
+/** Makes a project that the person owns; their labs take part in it, or the lab that is begun with it. */
+export function makeProject(who: string, { name, question, lab: newLab }: z.infer<typeof newProjectContract>): Promise<Project> {
   return asPerson(who, async (tx) => {
     const made = { id: v7(), name, question: question ?? null, createdBy: who, createdAt: new Date() }
+    if (newLab) await beginLab(tx, who, newLab)
     await tx.insert(project).values(made)
     const labs = await tx.selectDistinct({ lab: membership.lab }).from(membership).where(eq(membership.person, who))
     if (labs.length > 0) await tx.insert(projectLab).values(labs.map(({ lab }) => ({ project: made.id, lab })))

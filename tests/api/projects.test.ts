@@ -2,7 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest'
 import { listOf } from '#shared/contracts/common'
 import { projectContract, projectDetailContract } from '#shared/contracts/projects'
 import { seriesContract, seriesSummaryContract, type SeriesSummary } from '#shared/contracts/series'
-import { clearCounters } from './support/database'
+import { asOwner, clearCounters } from './support/database'
 import { demoProject, signedInAs } from './support/server'
 
 type Agent = Awaited<ReturnType<typeof signedInAs>>
@@ -33,6 +33,21 @@ describe('projects', () => {
     expect(detail.campaigns).toHaveLength(6)
     expect(detail.members.find(member => member.person.name === 'Ines Tamsel')?.role).toBe('owner')
     expect(detail.members).toHaveLength(5)
+  })
+
+  it('bring a lab with them for somebody who is in none, and for nobody else', async () => {
+    const newcomer = await signedInAs('outsider')
+    const make = (lab: string) => newcomer.post('/api/v1/projects').send({ name: 'A first project', lab })
+    expect((await make('norrvik').expect(409)).body.errors).toEqual([{ path: 'lab', message: 'is taken' }])
+    const { id } = (await make('A bench of its own').expect(201)).body
+    try {
+      expect((await newcomer.get(`/api/v1/projects/${id}`).expect(200)).body.labs).toEqual([expect.objectContaining({ name: 'A bench of its own' })])
+      await newcomer.post(`/api/v1/projects/${id}/campaigns`).send({ name: 'spring' }).expect(201)
+      expect((await make('Another bench').expect(400)).body.errors[0].path).toBe('lab')
+    }
+    finally {
+      await asOwner(client => client.query('delete from membership using lab where lab.id = membership.lab_id and lab.name = $1', ['A bench of its own']))
+    }
   })
 
   it('belong to whoever makes them and are hidden from everybody else', async () => {
