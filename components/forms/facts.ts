@@ -14,7 +14,7 @@ export const sampleFacts = ({ numberMeanMass, weightMeanMass, dispersity, massMe
   tacticity, given(lot, name => `lot ${name}`),
 )
 
-export const stockTitle = ({ salt, hydrate, lot, lab }: Stock) => `${hydrateFormula(plainFormula(salt.formula), hydrate)}${lot ? `, lot ${lot}` : ''}, ${lab.name}`
+export const stockTitle = ({ salt, hydrate, lot, lab }: Stock) => `${plainFormula(hydrateFormula(salt.formula, hydrate))}${lot ? `, lot ${lot}` : ''}, ${lab.name}`
 
 export const stockFacts = ({ salt, purity, madeOn, assay, relativeUncertainty, makeUp }: Stock) => line(
   salt.name, given(purity, share => `purity ${plain(share * 100)} %`), given(madeOn, day => `made on ${day}`),

@@ -67,7 +67,7 @@ function single(change: ProjectChange, project: string): Said {
     }
     case 'campaign': return { did: `${made ? 'started' : 'changed'} the campaign ${placeOf(campaign)}`, detail: '', link: campaign && { to: `/projects/${project}/campaigns/${campaign.id}`, words: 'Open' } }
     case 'batch': return { did: `${made ? 'added' : 'changed'} the batch ${textOf(values.label)}`, detail: placeOf(campaign), link: campaign && { to: `/projects/${project}/campaigns/${campaign.id}`, words: 'Open' } }
-    case 'sample': case 'instrument': return { did: `${made ? 'added' : 'changed'} the ${subject} ${textOf(values.name)}`, detail: '', link: { to: `/projects/${project}/materials`, words: 'Open' } }
+    case 'sample': case 'instrument': return { did: `${made ? 'added' : 'changed'} the ${subject} “${textOf(values.name)}”`, detail: '', link: { to: `/projects/${project}/materials`, words: 'Open' } }
     case 'stock': return { did: `${made ? 'added' : 'changed'} a stock of ${plainFormula(textOf(values.salt))}`, detail: values.lot ? `lot ${textOf(values.lot)}` : '', link: { to: `/projects/${project}/materials`, words: 'Open' } }
     default: return { did: made ? 'started the project' : 'changed the project', detail: textOf(values.name), link: null }
   }

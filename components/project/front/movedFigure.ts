@@ -33,7 +33,8 @@ export function movedFigure(all: readonly Moved[]): MovedFigure | null {
   const ends = rows.flatMap(({ before, now }) => [before, now].flatMap(({ estimate, standardError }) => [estimate - (standardError ?? 0), estimate + (standardError ?? 0)]))
   const [low, high] = [Math.min(...ends), Math.max(...ends)]
   const step = stepFor(Math.max(high - low, Math.abs(high) * 1e-6, 1e-9))
-  const [first, last] = [Math.floor(low / step) * step, Math.ceil(high / step) * step]
+  const first = Math.floor(low / step) * step
+  const last = Math.max(Math.ceil(high / step) * step, first + step)
   const x = (value: number) => left + (value - first) / (last - first) * (right - left)
   const whisker = ({ estimate, standardError }: Moved['now']): Whisker => ({ x: x(estimate), from: x(estimate - (standardError ?? 0)), to: x(estimate + (standardError ?? 0)) })
   const decimals = Math.max(0, -Math.floor(Math.log10(step) + 1e-9))

@@ -62,10 +62,10 @@ export function chargeOf(formula: string): number {
   return match[2] === '-' ? -size : size
 }
 
-/** Cuts a formula into what stands on the line, below and above it; the charge comes last, with a true minus sign. */
+/** Cuts a formula into what stands on the line, below and above it; the charge comes last, with a true minus sign. A count of waters stands on the line. */
 export function formulaPieces(formula: string): FormulaPiece[] {
   const [body = '', charge] = formula.split('^')
-  const pieces: FormulaPiece[] = [...body.matchAll(/([A-Za-z()·.]+)|(\d+)/g)].map(([text, , digits]) => digits ? { text, place: 'sub' as const } : { text })
+  const pieces: FormulaPiece[] = [...body.matchAll(/([A-Za-z()]+|[·.]\d*)|(\d+)/g)].map(([text, , digits]) => digits ? { text, place: 'sub' as const } : { text })
   if (charge) pieces.push({ text: charge.replace('-', '−'), place: 'sup' })
   return pieces
 }
