@@ -109,7 +109,7 @@ function campaignOf({ campaign: { id, name, clouds }, lab }: Head) {
 const millisecondsPerMonth = 365.25 / 12 * 86_400_000
 
 function stockOf({ stock: used }: Head, firstDay: string | null): SeriesSummary['stock'] {
-  if (!used?.lot) return null
+  if (!used) return null
   const age = used.madeOn && firstDay ? (Date.parse(firstDay) - Date.parse(used.madeOn)) / millisecondsPerMonth : null
-  return { lot: used.lot, madeOn: used.madeOn, ageAtUse: age }
+  return { id: used.id, lot: used.lot, madeOn: used.madeOn, ageAtUse: age }
 }

@@ -32,7 +32,8 @@ export const readingPointContract = z.object({
 
 /** What the salt was weighed into, when it is on record. */
 export const stockSummaryContract = z.object({
-  lot: z.string(),
+  id,
+  lot: z.string().nullable(),
   madeOn: z.iso.date().nullable(),
   ageAtUse: z.number().nullable().describe('months from making the stock to the first reading of the series'),
 })

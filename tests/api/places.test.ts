@@ -100,9 +100,9 @@ describe('a campaign', () => {
   it('is refused to a person whose labs are not in the project', async () => {
     const outsider = await signedInAs('outsider')
     const own = (await outsider.post('/api/v1/projects').send({ name: 'No lab of mine' }).expect(201)).body
-    const labs = (await outsider.get(`/api/v1/projects/${own.id}`).expect(200)).body.labs
-    const answer = await outsider.post(`/api/v1/projects/${own.id}/campaigns`).send({ name: 'x' })
-    expect(labs.length === 0 ? answer.status : 403).toBe(403)
+    expect((await outsider.get(`/api/v1/projects/${own.id}`).expect(200)).body.labs).toEqual([])
+    const { body } = await outsider.post(`/api/v1/projects/${own.id}/campaigns`).send({ name: 'x' }).expect(403)
+    expect(body.detail).toMatch(/Ask an owner to bring your lab in/)
   })
 })
 

@@ -103,3 +103,63 @@ describe('what is written', () => {
     expect(code).toBe(foreignKeyViolation)
   })
 })
+
+describe('what measuring writes', () => {
+  let place: { project: string, batch: string, campaign: string, lab: string, upload: string }
+  beforeAll(async () => {
+    const { rows } = await asOwner(client => client.query(`select c.project_id as project, c.id as campaign, c.lab_id as lab, b.id as batch from batch b
+      join campaign c on c.id = b.campaign_id join lab l on l.id = c.lab_id join project p on p.id = c.project_id where p.name = 'Shadehouse gel' and l.name = 'Norrvik' limit 1`))
+    place = rows[0]
+  })
+
+  const as = async (email: string, statement: string, values: (who: string) => unknown[]) => {
+    const who = await personId(email)
+    return asApp(who, client => refusalOf(client, statement, values(who)))
+  }
+  const blanks = 'insert into batch_revision (id, project_id, batch_id, number, summary, made_by) values ($1, $2, $3, 999, \'x\', $4)'
+  const recipe = 'insert into recipe (id, lab_id, name, signature, choices, made_by) values ($1, $2, $3, \'s\', \'{}\', $4)'
+  const visit = 'insert into project_visit (project_id, person_id) values ($1, $2) on conflict (project_id, person_id) do update set at = now()'
+
+  it('lets an editor revise blanks, in no other name', async () => {
+    const other = await personId(people.owner)
+    expect(await as(people.member, blanks, who => [v7(), place.project, place.batch, who])).toBeNull()
+    expect(await as(people.member, blanks, () => [v7(), place.project, place.batch, other])).toBe(insufficientPrivilege)
+  })
+
+  it.each([['a collaborator', people.collaborator], ['an outsider', people.outsider]])('refuses blanks to %s', async (_, email) => {
+    expect(await as(email, blanks, who => [v7(), place.project, place.batch, who])).toBe(insufficientPrivilege)
+  })
+
+  it('keeps a lab\'s recipes to its people', async () => {
+    expect(await as(people.member, recipe, who => [v7(), place.lab, `mine ${v7()}`, who])).toBeNull()
+    expect(await as(people.collaborator, recipe, who => [v7(), place.lab, `theirs ${v7()}`, who])).toBe(insufficientPrivilege)
+    const kept = v7()
+    const maker = await personId(people.member)
+    await asOwner(client => client.query(recipe, [kept, place.lab, `kept ${kept}`, maker]))
+    const seenBy = async (email: string) => asApp(await personId(email), async client => (await client.query('select 1 from recipe where id = $1', [kept])).rowCount)
+    expect(await seenBy(people.owner)).toBe(1)
+    expect(await seenBy(people.collaborator)).toBe(0)
+    await asOwner(client => client.query('delete from recipe where id = $1', [kept]))
+  })
+
+  it('lets everybody note their own visit to a project they see, and see no other', async () => {
+    const other = await personId(people.owner)
+    expect(await as(people.collaborator, visit, who => [place.project, who])).toBeNull()
+    expect(await as(people.collaborator, visit, () => [place.project, other])).toBe(insufficientPrivilege)
+    expect(await as(people.outsider, visit, who => [place.project, who])).toBe(insufficientPrivilege)
+    await asOwner(client => client.query(visit, [place.project, other]))
+    const seen = await asApp(await personId(people.collaborator), async client => (await client.query('select 1 from project_visit where person_id = $1', [other])).rowCount)
+    expect(seen).toBe(0)
+  })
+
+  it('begins a lab for nobody who is in one', async () => {
+    const begin = 'select guard.begin_lab($1, $2)'
+    expect(await as(people.member, begin, () => [v7(), `another ${v7()}`])).toBe(insufficientPrivilege)
+    expect(await as(people.outsider, begin, () => [v7(), `a first ${v7()}`])).toBeNull()
+    expect(await asApp(null, client => refusalOf(client, begin, [v7(), `nobody's ${v7()}`]))).toBe(insufficientPrivilege)
+  })
+
+  it.each([['table_import', people.outsider], ['batch_revision', people.outsider], ['batch_revision_reading', people.outsider]])('shows nothing of %s to an outsider', async (table, email) => {
+    expect(await asApp(await personId(email), async client => (await client.query(`select 1 from ${table} where project_id = $1`, [place.project])).rowCount)).toBe(0)
+  })
+})

@@ -37,7 +37,7 @@ export function demoSummaries(): SeriesSummary[] {
       id: idOf(lab, campaign, salt.formula),
       salt,
       campaign: { id: idOf(lab, campaign), name: campaign, lab: { id: idOf(lab), name: lab }, clouds: 'on-heating' },
-      stock: { lot: salt.formula, madeOn: null, ageAtUse: lab === 'Quaymere' && salt.anion === 'I^-' ? agedMonths : 0 },
+      stock: { id: `stock of ${salt.formula}`, lot: salt.formula, madeOn: null, ageAtUse: lab === 'Quaymere' && salt.anion === 'I^-' ? agedMonths : 0 },
       revision: own.length > 0 ? 1 : null,
       readings: [...blanks, ...own].map((row, index) => ({
         id: row.anion ? idOf(lab, campaign, row.anion, index) : idOf(lab, row.day, index),

@@ -1,6 +1,6 @@
 /** A series as it would be if the draft were kept now. */
 import type { FitChoice, Series } from '#shared/contracts/series'
-import { entersFit, fitAsChosen, pointsOf } from '#shared/science/fitting'
+import { branchOf, entersFit, fitAsChosen, pointsOf } from '#shared/science/fitting'
 import type { SeriesReading } from '~~/components/series/page/fitInput'
 import { requestOf, typedValues, type Faults, type Request } from './changes'
 import { choiceText, engineFaults, readChoice } from './choice'
@@ -60,7 +60,7 @@ function addedReadings(series: Series, draft: Draft): SeriesReading[] {
     if (faults.size > 0) return []
     return [{
       ...values, id: key, number: series.readings.length + index + 1, batch: batch && label !== undefined ? { id: batch, label } : null,
-      direction: series.campaign.clouds === 'on-cooling' ? 'cooling' : 'heating', limit: 'exact', blank: values.x === 0, setAside: null,
+      direction: branchOf(series.campaign.clouds), limit: 'exact', blank: values.x === 0, setAside: null,
       entersFit: true, changed: null, origin: 'typed',
     } satisfies SeriesReading]
   })

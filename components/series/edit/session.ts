@@ -69,6 +69,11 @@ export function useSeriesEditing(series: Ref<Series>) {
     restoredAt.value = null
   }
 
+  /** The series as it is now, with what is typed on top: its readings are the same. */
+  function replace(next: Series) {
+    series.value = next
+  }
+
   async function send(body: NewRevision): Promise<boolean> {
     isBusy.value = true
     refusal.value = ''
@@ -126,7 +131,7 @@ export function useSeriesEditing(series: Ref<Series>) {
     conflict.value = { base, theirs }
   }
 
-  return { series, draft, edited, settled, past, isAsked, isBusy, refused, refusal, conflict, restoredAt, draftState: keeping.state, act, undo, keep, send, giveUp, restore }
+  return { series, draft, edited, settled, past, isAsked, isBusy, refused, refusal, conflict, restoredAt, draftState: keeping.state, act, undo, replace, keep, send, giveUp, restore }
 }
 export type SeriesEditing = ReturnType<typeof useSeriesEditing>
 
