@@ -27,7 +27,7 @@ test.describe('one series of the demonstration', () => {
     await openSeries(page, 'Norrvik', 'spring', 'SCN^-')
     const readings = page.getByRole('table', { name: /^Readings 19, one set aside/ })
     await expect(readings.getByText('Air bubble at the window')).toBeVisible()
-    await expect(page.getByRole('table', { name: 'Model' }).getByRole('row', { name: /line \+ saturable binding/ })).toHaveClass(/sel/)
+    await expect(page.getByRole('table', { name: 'Model' }).getByRole('row', { name: /^line \+ saturable binding/ })).toHaveClass(/sel/)
     await expect(page.getByRole('table', { name: /^Constants/ }).getByRole('row')).toHaveCount(7)
     await expect(page.getByRole('heading', { name: 'One reading is set aside' })).toBeVisible()
     await expect(page.getByText('corrected from 32.70')).toBeVisible()
