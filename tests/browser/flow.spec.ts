@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises'
-import { expect, test, type Locator, type Page } from '@playwright/test'
+import { expect, test, type Locator, type Page } from '../support/page'
 import type { Series } from '#shared/contracts/series'
 import { uglyTable } from '../support/uglyTable'
 

@@ -1,10 +1,5 @@
-import { readFileSync } from 'node:fs'
-import { createRequire } from 'node:module'
-import { expect, test } from '@playwright/test'
-
-const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8')
-
-interface Violation { id: string, impact: string, nodes: { target: string[] }[] }
+import { expect, test } from '../support/page'
+import { seriousViolations } from '../support/axe'
 
 for (const theme of ['light', 'dark'] as const) {
   for (const width of [1440, 1024, 390]) {
@@ -14,13 +9,7 @@ for (const theme of ['light', 'dark'] as const) {
       test('has no serious accessibility violation', async ({ page }) => {
         await page.goto('/')
         await expect(page.locator('.plot svg').first()).toBeVisible()
-        await page.evaluate(axe)
-        const serious = await page.evaluate(async () => {
-          const { axe: engine } = window as unknown as { axe: { run: () => Promise<{ violations: Violation[] }> } }
-          const { violations } = await engine.run()
-          return violations.filter(({ impact }) => impact === 'serious' || impact === 'critical').map(({ id, nodes }) => `${id}: ${nodes.map(node => node.target.join(' ')).join(', ')}`)
-        })
-        expect(serious).toEqual([])
+        expect(await seriousViolations(page)).toEqual([])
       })
 
       test('does not scroll sideways', async ({ page }) => {

@@ -1,4 +1,4 @@
-import { expect, test } from '@playwright/test'
+import { expect, test } from '../support/page'
 
 test.describe('signing in', () => {
   test('leads to the projects', async ({ page }) => {

@@ -1,4 +1,4 @@
-import { expect, test, type Locator, type Page } from '@playwright/test'
+import { expect, test, type Locator, type Page } from '../support/page'
 
 const readings = [['0', '31.00'], ['0.05', '31.56'], ['0.12', '31.91'], ['0.2', '32.09'], ['0.3', '32.07'], ['0.4', '31.86'], ['0.6', '31.47'], ['1', '30.17']]
 

@@ -1,4 +1,4 @@
-import { expect, test, type Page } from '@playwright/test'
+import { expect, test, type Page } from '../support/page'
 import { seriousViolations, sidewaysScroll } from '../support/axe'
 import { demoSeriesPath, signInAs } from '../support/demo'
 

@@ -1,4 +1,4 @@
-import { expect, test, type Locator } from '@playwright/test'
+import { expect, test, type Locator } from '../support/page'
 import { seriousViolations, sidewaysScroll } from '../support/axe'
 import { demoSeriesPath, signInAs } from '../support/demo'
 

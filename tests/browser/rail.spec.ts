@@ -1,4 +1,4 @@
-import { expect, test, type Locator, type Page } from '@playwright/test'
+import { expect, test, type Locator, type Page } from '../support/page'
 import { demoSeriesPath, signInAs } from '../support/demo'
 
 async function openRail(page: Page): Promise<Locator> {

@@ -1,4 +1,4 @@
-import { expect, test, type Page } from '@playwright/test'
+import { expect, test, type Page } from '../support/page'
 import type { Series } from '#shared/contracts/series'
 import { seriousViolations, sidewaysScroll } from '../support/axe'
 import { signInAs } from '../support/demo'
