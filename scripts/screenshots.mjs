@@ -53,8 +53,10 @@ async function screensOf(browser, url) {
   return [
     { name: 'landing', path: '/', isSignedIn: false },
     { name: 'home', path: '/', isSignedIn: true },
+    { name: 'project', path: `/projects/${project}`, isSignedIn: true },
     { name: 'project-series', path: `/projects/${project}/series`, isSignedIn: true },
     { name: 'series', path: `/projects/${project}/series/${series}`, isSignedIn: true },
+    { name: 'materials', path: `/projects/${project}/materials`, isSignedIn: true },
   ]
 }
 
