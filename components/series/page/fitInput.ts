@@ -1,6 +1,6 @@
 import type { Series } from '#shared/contracts/series'
 import { pointsOf } from '#shared/science/fitting'
-import type { NamedRequest } from '#shared/science/diagnostics/influence'
+import type { NamedRequest } from '#shared/science/fitting/types'
 
 export type SeriesReading = Series['readings'][number]
 

@@ -1,12 +1,6 @@
 import { ScienceError } from '../errors'
 import { fit } from '../fitting'
-import type { FitRequest, ModelName, Point } from '../fitting/types'
-
-/** A fit of one named model to stated readings. */
-export interface NamedRequest extends FitRequest {
-  model: ModelName
-  points: readonly Point[]
-}
+import type { NamedRequest } from '../fitting/types'
 
 /** Estimate of one parameter, null where the readings leave it open or are too few. */
 export function estimateOf(request: NamedRequest, parameter: string): number | null {

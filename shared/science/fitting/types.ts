@@ -40,6 +40,9 @@ export interface FitRequest {
   intervals?: IntervalMethod
 }
 
+/** A fit of one named model. */
+export type NamedRequest = Omit<FitRequest, 'model'> & { model: ModelName }
+
 export const stopReasons = ['relative-offset', 'step', 'limit', 'bound', 'no-finite-optimum'] as const
 export type StopReason = typeof stopReasons[number]
 

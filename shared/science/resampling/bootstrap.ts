@@ -1,8 +1,9 @@
 /** Bootstrap of a series: how its constants, its curve and a new reading scatter when the readings are drawn anew. */
 import { ScienceError } from '../errors'
+import type { NamedRequest } from '../fitting/types'
 import { models, type Model } from '../models'
 import { bcaEnds, percentileEnds, type Ends } from './intervals'
-import { bootstrapKinds, Resampler, type BootstrapKind, type Refit, type Resampleable } from './resamples'
+import { bootstrapKinds, Resampler, type BootstrapKind, type Refit } from './resamples'
 
 export interface BootstrapOptions {
   kind: BootstrapKind
@@ -56,7 +57,7 @@ export class Bootstrap {
   private readonly readings: number[][] = []
 
   /** @throws ScienceError 'unusable-input', 'no-finite-optimum', 'no-freedom' */
-  constructor(request: Resampleable, private readonly options: BootstrapOptions) {
+  constructor(request: NamedRequest, private readonly options: BootstrapOptions) {
     check(options)
     this.model = models[request.model]
     this.resampler = new Resampler(request, options.kind, options.seed)
@@ -112,7 +113,7 @@ export class Bootstrap {
 }
 
 /** All at once, for short runs. */
-export function bootstrap(request: Resampleable, options: BootstrapOptions): BootstrapResult {
+export function bootstrap(request: NamedRequest, options: BootstrapOptions): BootstrapResult {
   const run = new Bootstrap(request, options)
   run.advance(options.samples)
   return run.result()

@@ -2,15 +2,12 @@
 import { analyseNamed } from '../fitting/named'
 import { toOriginal, type ScaledData } from '../fitting/scale'
 import { indexOf, solve, type End, type Problem } from '../fitting/solve'
-import type { FitRequest, ModelName } from '../fitting/types'
+import type { NamedRequest } from '../fitting/types'
 import { ScienceError } from '../errors'
 import { seededRandom, type Random } from '../random'
 
 export const bootstrapKinds = ['residual', 'case', 'parametric'] as const
 export type BootstrapKind = typeof bootstrapKinds[number]
-
-/** A named model with its points: the request of a fit that can be repeated. */
-export type Resampleable = FitRequest & { model: ModelName }
 
 /** Estimates of every parameter on the original axes; NaN where the resample leaves one open. */
 export interface Refit {
@@ -31,7 +28,7 @@ export class Resampler {
   private readonly deviation: number
   private readonly groups: number[][]
 
-  constructor(private readonly request: Resampleable, readonly kind: BootstrapKind, seed: number) {
+  constructor(private readonly request: NamedRequest, readonly kind: BootstrapKind, seed: number) {
     const { solution, covariance, variance, weights } = analyseNamed(request)
     if (solution.end) throw new ScienceError('no-finite-optimum', [{ path: 'points', message: 'the best K lies at 0 or without bound: there is no estimate to resample about' }])
     if (variance === null) throw new ScienceError('no-freedom', [{ path: 'points', message: 'as many constants as readings leave no scatter to resample' }])

@@ -7,9 +7,9 @@
  */
 import { ScienceError } from '../errors'
 import { fitWithoutNotes } from '../fitting/named'
-import type { FitResult, Point } from '../fitting/types'
+import type { FitResult, NamedRequest, Point } from '../fitting/types'
 import { models } from '../models'
-import { fitReweighted, type NamedFitRequest, type Reweighted } from './reweighted'
+import { fitReweighted, type Reweighted } from './reweighted'
 
 /** A reading whose concentration has a standard uncertainty sdX [mol/L], 0 where it is exact, as of a blank; y needs one as well [K]. */
 export interface UncertainPoint extends Point {
@@ -31,7 +31,7 @@ const settledStep = 1e-14
  * @param request its points carry sd of y and sdX of x
  * @throws ScienceError 'unusable-input' where an uncertainty is missing or out of range
  */
-export function fitErrorsInBoth(request: Omit<NamedFitRequest, 'points' | 'weighting'> & { points: readonly UncertainPoint[] }): ErrorsInBothFit {
+export function fitErrorsInBoth(request: Omit<NamedRequest, 'points' | 'weighting'> & { points: readonly UncertainPoint[] }): ErrorsInBothFit {
   check(request.points)
   const model = models[request.model]
   const places = request.points.map(({ x }) => x)

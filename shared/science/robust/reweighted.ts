@@ -1,9 +1,7 @@
 /** Fits whose weights depend on the fit: repeated until they agree. */
 import { fit } from '../fitting/fit'
 import { fitWithoutNotes } from '../fitting/named'
-import type { FitRequest, FitResult, ModelName, Point } from '../fitting/types'
-
-export type NamedFitRequest = FitRequest & { model: ModelName }
+import type { FitResult, NamedRequest, Point } from '../fitting/types'
 
 export interface Reweighted {
   fit: FitResult
@@ -30,7 +28,7 @@ function agree(one: FitResult, other: FitResult): boolean {
  * @param derive the points of the next round; their sd are relative standard uncertainties [K]
  * @throws ScienceError as `fit` does
  */
-export function fitReweighted(request: NamedFitRequest, first: FitResult, derive: (fit: FitResult) => Point[]): Reweighted & { points: Point[] } {
+export function fitReweighted(request: NamedRequest, first: FitResult, derive: (fit: FitResult) => Point[]): Reweighted & { points: Point[] } {
   let current = first
   let points = derive(current)
   for (let rounds = 1; rounds <= mostRounds; rounds++) {
@@ -43,6 +41,6 @@ export function fitReweighted(request: NamedFitRequest, first: FitResult, derive
   throw new Error('unreachable')
 }
 
-function requestWith(request: NamedFitRequest, points: Point[]): NamedFitRequest {
+function requestWith(request: NamedRequest, points: Point[]): NamedRequest {
   return { ...request, points, weighting: 'sd', sdMeaning: request.sdMeaning ?? 'relative' }
 }

@@ -7,8 +7,8 @@
  * @source Huber, Annals of Mathematical Statistics 35 (1964) 73; Beaton, Technometrics 16 (1974) 147 (the biweight)
  */
 import { analyseNamed, fitWithoutNotes } from '../fitting/named'
-import type { FitResult, Point } from '../fitting/types'
-import { fitReweighted, type NamedFitRequest, type Reweighted } from './reweighted'
+import type { FitResult, NamedRequest, Point } from '../fitting/types'
+import { fitReweighted, type Reweighted } from './reweighted'
 
 export const robustKinds = ['huber', 'tukey'] as const
 export type RobustKind = typeof robustKinds[number]
@@ -36,7 +36,7 @@ const weightOf: Record<RobustKind, (u: number) => number> = {
  * @returns the fit, with each reading's weight and the scale
  * @throws ScienceError as `fit` does
  */
-export function fitRobust(request: NamedFitRequest, kind: RobustKind): RobustFit {
+export function fitRobust(request: NamedRequest, kind: RobustKind): RobustFit {
   const { weights: own } = analyseNamed(request)
   const roots = request.points.map((_, i) => own.values ? Math.sqrt(own.values[i]!) : 1)
   const start = kind === 'tukey' ? fitRobust(request, 'huber').fit : fitWithoutNotes(request)

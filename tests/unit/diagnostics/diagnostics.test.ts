@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { estimateOf, influenceOn, type NamedRequest } from '#shared/science/diagnostics/influence'
+import { estimateOf, influenceOn } from '#shared/science/diagnostics/influence'
+import type { NamedRequest } from '#shared/science/fitting/types'
 import { normalQuantiles } from '#shared/science/diagnostics/normal-quantiles'
 import { tradeContour } from '#shared/science/diagnostics/trade-contour'
 import { fit } from '#shared/science/fitting'
