@@ -2,12 +2,15 @@ import { and, eq, inArray, sql } from 'drizzle-orm'
 import { asPerson, asSystem, type Transaction } from '../database/client'
 import { job } from '../database/schema'
 import type { JobKind } from '../database/schema/jobs'
+import { drawBootstrap } from './bootstrap'
 import { refit } from './refit'
 
 /** What a handler works with: it does its work in transactions of the person who asked, one a chunk. */
 export interface JobContext {
   person: string
   project: string
+  /** as it was asked for */
+  input: Record<string, unknown>
   inTransaction: <Answer>(work: (tx: Transaction) => Promise<Answer>) => Promise<Answer>
   /** Keeps the progress. @throws JobCancelled, JobInterrupted where the work has to end here */
   report: (done: number, total: number) => Promise<void>
@@ -17,7 +20,7 @@ export class JobCancelled extends Error {}
 /** The worker stops: the queue hands the job to the next one, and the handler goes on where it was. */
 export class JobInterrupted extends Error {}
 
-const handlers: Record<JobKind, (context: JobContext) => Promise<void>> = { refit }
+const handlers: Record<JobKind, (context: JobContext) => Promise<void>> = { refit, bootstrap: drawBootstrap }
 
 type JobRow = typeof job.$inferSelect
 const unfinished = ['waiting', 'running'] as const
@@ -57,6 +60,7 @@ function contextOf(row: JobRow, stopping: AbortSignal): JobContext {
   return {
     person: row.person,
     project: row.project!,
+    input: row.input,
     inTransaction: work => asPerson(row.person, work),
     async report(done, total) {
       const now = await update(row.id, { done, total })

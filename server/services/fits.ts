@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto'
-import { desc, eq, inArray } from 'drizzle-orm'
+import { and, desc, eq, inArray } from 'drizzle-orm'
 import { v7 } from 'uuid'
 import { choiceFaults, fitAsChosen, pointsOf, type ChosenFit } from '#shared/science/fitting'
 import type { FitResult } from '#shared/science/fitting/types'
@@ -61,7 +61,7 @@ export async function currentFits(tx: Transaction, revisions: readonly string[])
   const rows = await tx.selectDistinctOn([fitRevision.revision], { revision: fitRevision.revision, id: fit.id, result: fitResult.result })
     .from(fitRevision).innerJoin(fit, eq(fit.id, fitRevision.fit))
     .innerJoin(fitResult, eq(fitResult.fit, fit.id))
-    .where(inArray(fitRevision.revision, [...revisions]))
+    .where(and(inArray(fitRevision.revision, [...revisions]), eq(fitResult.kind, 'estimate')))
     .orderBy(fitRevision.revision, desc(fit.createdAt), desc(fit.id), fitResult.createdAt)
-  return new Map(rows.map(({ revision, id, result }) => [revision, { ...result, id }]))
+  return new Map(rows.map(({ revision, id, result }) => [revision, { ...result as FitResult, id }]))
 }

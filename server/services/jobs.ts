@@ -9,7 +9,7 @@ import { ServiceError } from './errors'
 
 type JobRow = typeof job.$inferSelect
 
-function written({ id, kind, state, done, total, cancelRequested, problem, createdAt, finishedAt }: JobRow): Job {
+export function writtenJob({ id, kind, state, done, total, cancelRequested, problem, createdAt, finishedAt }: JobRow): Job {
   return { id, kind, state, done, total, cancelRequested, problem, createdAt: createdAt.toISOString(), finishedAt: finishedAt?.toISOString() ?? null }
 }
 
@@ -28,7 +28,7 @@ export async function jobRight(who: string, id: string): Promise<'own' | 'see' |
 export async function showJob(who: string, id: string): Promise<Job> {
   const row = await readJob(who, id)
   if (!row) throw new ServiceError('not-found', 'There is no such job any more.')
-  return written(row)
+  return writtenJob(row)
 }
 
 /** Starts fitting every series of a project again; row and message are written together. */
@@ -38,7 +38,7 @@ export function startRefit(who: string, project: string): Promise<Job> {
     const [row] = await tx.insert(job).values({ id, kind: 'refit', project, person: who, input: {} }).returning()
     await note(tx, who, { project, action: 'started', subject: 'job', id, values: { kind: 'refit' } })
     await enqueue(tx, 'refit', id)
-    return written(row!)
+    return writtenJob(row!)
   })
 }
 
@@ -48,7 +48,7 @@ export function cancelJob(who: string, id: string): Promise<Job> {
     await tx.update(job).set({ cancelRequested: true, version: sql`${job.version} + 1` })
       .where(and(eq(job.id, id), sql`${job.state} in ('waiting', 'running')`))
     const [row] = await tx.select().from(job).where(eq(job.id, id))
-    return written(row!)
+    return writtenJob(row!)
   })
 }
 
@@ -61,7 +61,7 @@ export async function* watchJob(who: string, id: string, seen: number, gone: Abo
     if (!row) return
     if (row.version > last) {
       last = row.version
-      yield { id: String(last), name: 'job', data: written(row) }
+      yield { id: String(last), name: 'job', data: writtenJob(row) }
     }
     if (row.finishedAt) return
     await pause(gone)

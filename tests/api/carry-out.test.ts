@@ -54,6 +54,31 @@ describe('carrying out a job', () => {
   })
 })
 
+describe('a bootstrap whose worker is stopped', () => {
+  const seed = 20261201
+  const request = { model: 'linear', points: [31, 29.9, 29.1, 27.95, 27.05, 26].map((y, i) => ({ x: i / 5, y })) }
+  const kept = (fit: string) => asOwner(async client =>
+    (await client.query('select count(*)::int as count from fit_result where fit_id = $1 and kind = \'bootstrap\' and result ->> \'seed\' = $2', [fit, String(seed)])).rows[0].count as number)
+
+  async function rowOfBootstrap(fit: string): Promise<string> {
+    const id = v7()
+    const input = { series: v7(), fit, request, options: { kind: 'residual', samples: 600, seed, confidence: 0.95 } }
+    await asOwner(client => client.query('insert into job (id, kind, project_id, person_id, input) values ($1, \'bootstrap\', $2, $3, $4)', [id, project, person, input]))
+    return id
+  }
+
+  it('keeps nothing then, and one result once it is drawn, also when it is drawn again', async () => {
+    const fit = await asOwner(async client => (await client.query('select id from fit where project_id = $1 limit 1', [project])).rows[0].id as string)
+    const id = await rowOfBootstrap(fit)
+    await expect(carryOut(id, AbortSignal.abort())).rejects.toThrow(JobInterrupted)
+    expect(await kept(fit)).toBe(0)
+    await carryOut(id, running)
+    expect(await stateOf(id)).toMatchObject({ state: 'done', done: 600 })
+    await carryOut(await rowOfBootstrap(fit), running)
+    expect(await kept(fit)).toBe(1)
+  })
+})
+
 /** A project whose one series has no fit yet, and a reader of it who may keep none. */
 async function unfittedProject(): Promise<{ project: string, person: string }> {
   const [maker, reader] = [await personId(people.outsider), await personId(people.admin)]

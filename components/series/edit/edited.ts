@@ -6,6 +6,9 @@ import { requestOf, typedValues, type Faults, type Request } from './changes'
 import { choiceText, engineFaults, readChoice } from './choice'
 import { isBlankDraft, type Draft } from './draft'
 
+/** Stands for the id of a fit that is not kept. */
+export const draftFit = 'draft'
+
 export interface EditedSeries {
   /** with the draft's values, and the constants they give */
   series: Series
@@ -27,7 +30,7 @@ export function editedSeries(series: Series, draft: Draft): EditedSeries {
   const points = pointsOf(readings)
   const isChanged = !isBlankDraft(draft)
   const made = isChanged ? fitAsChosen(points, choice) : null
-  const fit = isChanged ? made && { ...made.result, id: 'draft' } : series.fit
+  const fit = isChanged ? made && { ...made.result, id: draftFit } : series.fit
   const faults: Faults = new Map([...request.faults, ...(asked?.faults ?? []), ...(isOtherChoice ? engineFaults(points, asked.choice) : [])])
   const { changes, batches } = request.body
   return { series: { ...series, readings, fit, choice }, request, faults, isChanged, hasChanges: changes.length + batches.length > 0 || isOtherChoice }

@@ -1,5 +1,6 @@
 import { foreignKey, index, jsonb, pgEnum, pgTable, primaryKey, text, unique, uuid } from 'drizzle-orm/pg-core'
 import { modelNames, type FitRequest, type FitResult } from '#shared/science/fitting/types'
+import type { BootstrapResult } from '#shared/science/resampling/bootstrap'
 import { createdAt, identity } from './columns'
 import { person } from './people'
 import { project } from './projects'
@@ -58,7 +59,7 @@ export const fitResult = pgTable('fit_result', {
   project: uuid('project_id').notNull(),
   fit: uuid('fit_id').notNull(),
   kind: fitResultKind('kind').notNull(),
-  result: jsonb('result').$type<FitResult>().notNull(),
+  result: jsonb('result').$type<FitResult | BootstrapResult>().notNull(),
   createdAt: createdAt(),
 }, table => [
   foreignKey({ name: 'fit_result_fit', columns: [table.fit, table.project], foreignColumns: [fit.id, fit.project] }),

@@ -6,7 +6,7 @@ import { person } from './people'
 import { project } from './projects'
 
 export const jobState = pgEnum('job_state', jobStates)
-export const jobKinds = ['refit'] as const
+export const jobKinds = ['refit', 'bootstrap'] as const
 export type JobKind = typeof jobKinds[number]
 export const jobKind = pgEnum('job_kind', jobKinds)
 

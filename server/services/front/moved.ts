@@ -33,9 +33,9 @@ async function newestFits(tx: Transaction, project: string, until?: Date) {
     .innerJoin(seriesRevision, eq(seriesRevision.series, series.id))
     .innerJoin(fitRevision, eq(fitRevision.revision, seriesRevision.id))
     .innerJoin(fit, eq(fit.id, fitRevision.fit)).innerJoin(fitResult, eq(fitResult.fit, fit.id))
-    .where(and(eq(series.project, project), isNull(series.deletedAt), until ? lte(fit.createdAt, until) : undefined))
+    .where(and(eq(series.project, project), isNull(series.deletedAt), eq(fitResult.kind, 'estimate'), until ? lte(fit.createdAt, until) : undefined))
     .orderBy(series.id, desc(seriesRevision.number), desc(fit.createdAt), desc(fit.id), fitResult.createdAt)
-  return new Map(rows.map(row => [row.id, row]))
+  return new Map(rows.map(row => [row.id, { ...row, result: row.result as FitResult }]))
 }
 
 const constantOf = ({ parameters }: FitResult, name: string) => parameters.find(parameter => parameter.name === name && parameter.estimate !== null)
