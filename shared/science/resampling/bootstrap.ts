@@ -73,7 +73,7 @@ export class Bootstrap {
     while (this.drawn.length < until) {
       const refit = this.resampler.next()
       this.drawn.push(refit)
-      if (this.options.at && !refit.end) this.readings.push(this.options.at.map(() => this.resampler.toKelvin(this.resampler.noise())))
+      if (this.options.at && !refit.end) this.readings.push(this.options.at.map(() => this.resampler.newReading()))
     }
     return this.drawn.length === this.options.samples
   }

@@ -9,6 +9,9 @@ import { seededRandom, type Random } from '../random'
 export const bootstrapKinds = ['residual', 'case', 'parametric'] as const
 export type BootstrapKind = typeof bootstrapKinds[number]
 
+/** Sets the seed of the second stream apart from that of the first. */
+const otherStream = 0x5BD1E995
+
 /** Estimates of every parameter on the original axes; NaN where the resample leaves one open. */
 export interface Refit {
   values: Float64Array
@@ -22,6 +25,8 @@ export class Resampler {
   readonly original: Refit
   private readonly problem: Problem
   private readonly random: Random
+  /** A stream of its own: whether a band is asked for changes no draw. */
+  private readonly randomForReadings: Random
   private readonly fitted: Float64Array
   /** Whitened, corrected for leverage, centred: what residual resampling draws from. */
   private readonly residuals: Float64Array
@@ -35,6 +40,7 @@ export class Resampler {
     this.problem = solution.problem
     const { data } = this.problem
     this.random = seededRandom(seed)
+    this.randomForReadings = seededRandom(seed ^ otherStream)
     this.names = this.problem.model.parameters.map(({ name }) => name)
     this.original = { values: originals(this.problem, solution.values), end: null }
     this.fitted = Float64Array.from(data.x, x => this.problem.model.value(solution.values, x))
@@ -49,7 +55,7 @@ export class Resampler {
   next(): Refit {
     if (this.kind === 'case') return this.fitRows(this.drawRows())
     const { data } = this.problem
-    const y = Float64Array.from(this.fitted, (fitted, i) => fitted + this.noise() / data.root[i]!)
+    const y = Float64Array.from(this.fitted, (fitted, i) => fitted + this.noise(this.random) / data.root[i]!)
     return this.fitTo({ ...data, y })
   }
 
@@ -62,14 +68,14 @@ export class Resampler {
     })
   }
 
-  /** A whitened deviation of one reading: for a band about new readings. */
-  noise(): number {
-    return this.kind === 'parametric' ? this.deviation * this.random.normal() : this.residuals[Math.floor(this.random.uniform() * this.residuals.length)]!
+  /** How far one new reading would lie off the curve [K], for a reading of the heaviest weight there is. */
+  newReading(): number {
+    return this.noise(this.randomForReadings) * this.problem.data.yScale
   }
 
-  /** Cloud point [°C] of a deviation on scaled axes, for a reading of the heaviest weight there is. */
-  toKelvin(deviation: number): number {
-    return deviation * this.problem.data.yScale
+  /** A whitened deviation of one reading. */
+  private noise(random: Random): number {
+    return this.kind === 'parametric' ? this.deviation * random.normal() : this.residuals[Math.floor(random.uniform() * this.residuals.length)]!
   }
 
   private drawRows(): number[] {

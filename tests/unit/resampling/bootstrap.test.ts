@@ -29,6 +29,11 @@ describe('a bootstrap', () => {
     expect(run.result()).toEqual(bootstrap(request, options))
   })
 
+  it('draws the same whether a band is asked for or not', () => {
+    const options = { kind: 'residual', samples: 200, seed: 3 } as const
+    expect(bootstrap(request, { ...options, at: [0.1] }).quantities).toEqual(bootstrap(request, options).quantities)
+  })
+
   it.each(bootstrapKinds)('by %s gives a straight line the scatter that least squares gives it', (kind) => {
     const { quantities } = bootstrap(line, { kind, samples: 4_000, seed: 11 })
     const { parameters } = fit(line)
