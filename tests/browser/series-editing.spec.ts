@@ -91,9 +91,9 @@ test.describe('editing a series', () => {
 test('constants under other choices, and intervals drawn by the worker, stand beneath the diagnostics', async ({ page }) => {
   const { place } = await newSeries(page)
   await page.goto(place)
-  await expect(page.getByRole('table', { name: 'Constants under other choices' }).getByRole('row', { name: /robust, Tukey/ })).toBeVisible()
+  await expect(page.getByRole('table', { name: 'Other choices' }).getByRole('row', { name: /robust, Tukey/ })).toBeVisible()
   await page.getByRole('button', { name: 'Draw' }).click()
-  await expect(page.getByRole('table', { name: 'Constants by resampling' }).getByRole('row')).toHaveCount(8)
+  await expect(page.getByRole('table', { name: 'By resampling' }).getByRole('row')).toHaveCount(8)
   await expect(page.getByText(/^2,000 draws, residuals drawn anew, seed \d+/)).toBeVisible()
 })
 

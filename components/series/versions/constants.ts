@@ -1,6 +1,7 @@
 /** Constants of two fits beside each other. */
 import type { Series } from '#shared/contracts/series'
-import { concise, fixed } from '#shared/science/notation'
+import { concise } from '#shared/science/notation'
+import { signed } from '~~/components/chart/rail/signed'
 
 export interface ConstantPair {
   name: string
@@ -12,8 +13,6 @@ export interface ConstantPair {
 
 type Fit = Series['fit']
 
-const signOf = (value: number) => value > 0 ? '+' : ''
-
 /** Every constant of either fit; the difference is given in standard errors of the first. */
 export function constantPairs(first: Fit, second: Fit): ConstantPair[] {
   const names = [...new Set([...first?.parameters ?? [], ...second?.parameters ?? []].map(({ name }) => name))]
@@ -21,6 +20,6 @@ export function constantPairs(first: Fit, second: Fit): ConstantPair[] {
     const [a, b] = [first, second].map(fit => fit?.parameters.find(parameter => parameter.name === name))
     const print = (one: typeof a) => one ? `${concise(one.estimate, one.standardError)}${one.fixed ? ' held' : ''}` : '—'
     const change = a?.standardError && a.estimate !== null && b && b.estimate !== null ? (b.estimate - a.estimate) / a.standardError : null
-    return { name, unit: (a ?? b)!.unit, values: [print(a), print(b)], shift: change === null ? null : `${signOf(Number(change.toFixed(1)))}${fixed(change, 1)}` }
+    return { name, unit: (a ?? b)!.unit, values: [print(a), print(b)], shift: change === null ? null : signed(change, 1) }
   })
 }
