@@ -3,9 +3,6 @@ import type { criteria, enthalpyBases, replicateKinds, cloudings } from '#shared
 import type { instrumentKinds, massMethods } from '#shared/contracts/materials'
 import type { FormField } from './fields'
 
-const massWords: Record<typeof massMethods[number], string> = {
-  'SEC': 'size-exclusion chromatography', 'MALDI': 'mass spectrometry (MALDI)', 'NMR': 'end groups by NMR', 'light-scattering': 'light scattering', 'sequence': 'from the sequence', 'maker': 'stated by the maker',
-}
 const kindWords: Record<typeof instrumentKinds[number], string> = {
   'transmittance': 'transmittance', 'absorbance': 'absorbance', 'scattering': 'scattered light', 'by-eye': 'by eye',
 }
@@ -23,7 +20,7 @@ export const sampleFields: readonly FormField[] = [
   { name: 'numberMeanMass', label: '*M*~n~ / g mol^−1^', kind: 'number', isForReport: true },
   { name: 'weightMeanMass', label: '*M*~w~ / g mol^−1^', kind: 'number' },
   { name: 'dispersity', label: 'Dispersity *M*~w~/*M*~n~', kind: 'number', isForReport: true },
-  { name: 'massMethod', label: 'Masses found by', kind: 'choice', options: options(massWords), isForReport: true },
+  { name: 'massMethod', label: 'Masses found by', kind: 'text', hint: `such as ${massMethods.slice(0, 3).join(', ')}`, isForReport: true },
   { name: 'endGroups', label: 'End groups', kind: 'text', isForReport: true },
   { name: 'tacticity', label: 'Tacticity', kind: 'text', isForReport: true },
   { name: 'lot', label: 'Lot', kind: 'text' },
