@@ -1,6 +1,6 @@
 /** The forms of what a lab measures with. Which fields a report wants: common practice of turbidity work. */
 import type { criteria, enthalpyBases, replicateKinds, cloudings } from '#shared/contracts/campaigns'
-import type { instrumentKinds, massMethods } from '#shared/contracts/materials'
+import type { instrumentKinds } from '#shared/contracts/materials'
 import type { FormField } from './fields'
 
 const kindWords: Record<typeof instrumentKinds[number], string> = {
@@ -20,7 +20,7 @@ export const sampleFields: readonly FormField[] = [
   { name: 'numberMeanMass', label: '*M*~n~ / g mol^−1^', kind: 'number', isForReport: true },
   { name: 'weightMeanMass', label: '*M*~w~ / g mol^−1^', kind: 'number' },
   { name: 'dispersity', label: 'Dispersity *M*~w~/*M*~n~', kind: 'number', isForReport: true },
-  { name: 'massMethod', label: 'Masses found by', kind: 'text', hint: `such as ${massMethods.slice(0, 3).join(', ')}`, isForReport: true },
+  { name: 'massMethod', label: 'Masses found by', kind: 'text', hint: 'such as SEC, MALDI, NMR', isForReport: true },
   { name: 'endGroups', label: 'End groups', kind: 'text', isForReport: true },
   { name: 'tacticity', label: 'Tacticity', kind: 'text', isForReport: true },
   { name: 'lot', label: 'Lot', kind: 'text' },
