@@ -34,8 +34,6 @@ export interface SensitivityRow {
 
 export interface Sensitivity {
   rows: SensitivityRow[]
-  /** the largest shift of every constant, in its standard errors, and by which choice */
-  largest: { name: string, shift: number, variation: Variation }[]
 }
 
 type Clouds = 'on-heating' | 'on-cooling'
@@ -48,8 +46,7 @@ type Clouds = 'on-heating' | 'on-cooling'
  * @returns shifts in standard errors of `base`; a choice that cannot be fitted is left out
  */
 export function sensitivityOf(readings: readonly JudgedReading[], request: Omit<NamedRequest, 'points'>, base: FitResult, clouds: Clouds): Sensitivity {
-  const rows = fitsOf(readings, request, base, clouds).map(([variation, result]) => ({ variation, constants: constantsOf(base, result) }))
-  return { rows, largest: largestOf(rows) }
+  return { rows: fitsOf(readings, request, base, clouds).map(([variation, result]) => ({ variation, constants: constantsOf(base, result) })) }
 }
 
 type Varied = [Variation, FitResult | null]
@@ -102,13 +99,5 @@ function constantsOf(base: FitResult, other: FitResult): SensitivityRow['constan
   return base.parameters.filter(({ fixed }) => !fixed).map(({ name, estimate, standardError }) => {
     const found = other.parameters.find(parameter => parameter.name === name)?.estimate ?? null
     return { name, estimate: found, shift: found !== null && estimate !== null && standardError ? (found - estimate) / standardError : null }
-  })
-}
-
-function largestOf(rows: readonly SensitivityRow[]): Sensitivity['largest'] {
-  const names = rows[0]?.constants.map(({ name }) => name) ?? []
-  return names.flatMap((name, j) => {
-    const shifts = rows.flatMap(({ variation, constants }) => constants[j]!.shift === null ? [] : [{ name, shift: constants[j]!.shift, variation }])
-    return shifts.length > 0 ? [shifts.reduce((most, one) => Math.abs(one.shift) > Math.abs(most.shift) ? one : most)] : []
   })
 }
